@@ -1,0 +1,89 @@
+import { blob, index, integer, real, sqliteTable, text } from 'drizzle-orm/sqlite-core'
+import type { MassKind, Measure, TableLayout, TableProposal } from '../../../shared/science/table/layout'
+import { createdAt, id, moment } from './columns'
+import { people } from './people'
+import { samples, studies } from './studies'
+
+/** A file as it came, kept compressed under `originals/` in the data folder by its SHA-256. */
+export const originals = sqliteTable('originals', {
+  sha256: text().primaryKey(),
+  /** Size as it came. */
+  bytes: integer().notNull(),
+  compressedBytes: integer().notNull(),
+  createdAt: createdAt(),
+})
+
+/** A remembered way to read one kind of export. */
+export const layouts = sqliteTable('layouts', {
+  id: id(),
+  name: text().notNull(),
+  /** The shape it reads: a digest of the header as normalised. */
+  fingerprint: text().notNull(),
+  layout: text({ mode: 'json' }).$type<TableLayout>().notNull(),
+  createdBy: text().notNull().references(() => people.id),
+  createdAt: createdAt(),
+}, table => [index('layouts_fingerprint').on(table.fingerprint)])
+
+/** reading: a job is at it. waiting: a person must answer. read: its tables stand. refused: nothing of it is kept but this row. */
+export type UploadStatus = 'reading' | 'waiting' | 'read' | 'refused'
+
+/** One file a person sent, and what became of it. */
+export const uploads = sqliteTable('uploads', {
+  id: id(),
+  studyId: text().notNull().references(() => studies.id, { onDelete: 'cascade' }),
+  fileName: text().notNull(),
+  sha256: text().notNull(),
+  bytes: integer().notNull(),
+  status: text().$type<UploadStatus>().notNull(),
+  fingerprint: text(),
+  proposal: text({ mode: 'json' }).$type<TableProposal>(),
+  /** The layout a person or a remembered layout decided. */
+  layout: text({ mode: 'json' }).$type<TableLayout>(),
+  /** Why it was refused, or what was noticed (the same content stands already), as a sentence. */
+  remark: text(),
+  /** The table this one is to replace. */
+  replacesTableId: text(),
+  jobId: text(),
+  createdBy: text().notNull().references(() => people.id),
+  createdAt: createdAt(),
+  /** A waiting file is let go after this. */
+  expiresAt: moment(),
+}, table => [index('uploads_study').on(table.studyId)])
+
+/** One list of features of one sample; a wide file makes one a column. */
+export const tables = sqliteTable('tables', {
+  id: id(),
+  studyId: text().notNull().references(() => studies.id, { onDelete: 'cascade' }),
+  uploadId: text().notNull().references(() => uploads.id),
+  sampleId: text().references(() => samples.id, { onDelete: 'set null' }),
+  originalSha256: text().notNull().references(() => originals.sha256),
+  fileName: text().notNull(),
+  /** The sample column of a wide file. */
+  columnName: text(),
+  /** The same for all tables of one wide file. */
+  wideGroup: text(),
+  /** Wide files: share of empty cells; below 1 % the column seems gap-filled. */
+  emptyShare: real(),
+  /** SHA-256 of the packed columns m/z, minutes, intensity. */
+  digest: text().notNull(),
+  layout: text({ mode: 'json' }).$type<TableLayout>().notNull(),
+  measure: text().$type<Measure>().notNull(),
+  massKind: text().$type<MassKind>().notNull(),
+  features: integer().notNull(),
+  refusedRows: integer().notNull().default(0),
+  /** Compressed JSON of the refused rows: line, column, value, reason. */
+  refused: blob({ mode: 'buffer' }),
+  /** Packed Float64. */
+  mz: blob({ mode: 'buffer' }).notNull(),
+  retentionMinutes: blob({ mode: 'buffer' }).notNull(),
+  intensity: blob({ mode: 'buffer' }).notNull(),
+  width: blob({ mode: 'buffer' }),
+  /** Packed Int32: the row of the wide file each feature stood in. */
+  wideRow: blob({ mode: 'buffer' }),
+  /** The peak limit a person states; else the floor is estimated. */
+  statedFloor: real(),
+  createdBy: text().notNull().references(() => people.id),
+  createdAt: createdAt(),
+  replacedAt: moment(),
+  replacedBy: text(),
+}, table => [index('tables_study').on(table.studyId), index('tables_sample').on(table.sampleId), index('tables_digest').on(table.digest)])

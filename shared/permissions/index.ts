@@ -1,0 +1,3 @@
+export * from './actions'
+export * from './can'
+export * from './roles'
