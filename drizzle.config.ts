@@ -1,3 +1,3 @@
 import { defineConfig } from 'drizzle-kit'
 
-export default defineConfig({ dialect: 'sqlite', schema: './server/db/schema/index.ts', out: './drizzle' })
+export default defineConfig({ dialect: 'sqlite', casing: 'snake_case', schema: './server/db/schema/index.ts', out: './drizzle' })

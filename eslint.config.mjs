@@ -5,5 +5,7 @@ export default withNuxt({
     '@typescript-eslint/no-explicit-any': 'error',
     'vue/multi-word-component-names': 'off',
     'vue/html-self-closing': 'off',
+    'vue/require-default-prop': 'off',
+    'vue/no-multiple-template-root': 'off',
   },
 }, { ignores: ['drizzle/**', 'tests/reference/**/*.py', '.data/**'] })

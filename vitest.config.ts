@@ -17,7 +17,7 @@ export default defineConfig({
       plain('reference'),
       plain('server'),
       await defineVitestProject({ test: { name: 'nuxt', include: ['tests/nuxt/**/*.test.ts'], environment: 'nuxt', testTimeout: 60_000 } }),
-      plain('browser', { include: ['tests/e2e/**/*.test.ts'], fileParallelism: false, globalSetup: ['tests/support/builtServer.ts'], testTimeout: 240_000, hookTimeout: 240_000 }),
+      plain('browser', { include: ['tests/e2e/**/*.test.ts'], fileParallelism: false, testTimeout: 240_000, hookTimeout: 240_000 }),
     ],
   },
 })

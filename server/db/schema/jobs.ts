@@ -1,8 +1,9 @@
 import { index, integer, real, sqliteTable, text } from 'drizzle-orm/sqlite-core'
+import type { JobStatus } from '../../../shared/types/job'
 import { createdAt, id, moment } from './columns'
 import { studies } from './studies'
 
-export type JobStatus = 'queued' | 'running' | 'done' | 'failed' | 'cancelled'
+export type { JobStatus }
 
 /** Long work, done in a worker thread. Found running at start-up: queued again, at most twice. */
 export const jobs = sqliteTable('jobs', {

@@ -1,0 +1,19 @@
+import { can, type Action, type Role } from '#shared/permissions'
+
+export interface Me {
+  person: { id: string, name: string, signInName: string, roles: Role[] } | null
+  demo: boolean
+}
+
+/** Who is signed in. One request a page load, shared by all who ask. */
+export async function useMe() {
+  const { data, refresh } = await useFetch<Me>('/api/me', { key: 'me' })
+  const me = computed(() => data.value?.person ?? null)
+  return {
+    me,
+    demo: computed(() => data.value?.demo ?? false),
+    /** The same table the server asks; here it only decides what to show. */
+    may: (action: Action) => me.value !== null && can(me.value, action),
+    refresh,
+  }
+}

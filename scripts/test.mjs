@@ -1,0 +1,48 @@
+// `npm test`: the first command on a fresh clone. Installs what tests need, then lint, types and every test project,
+// and closes with a line `N passed, N failed`.
+import { spawnSync } from 'node:child_process'
+import { existsSync, readFileSync, rmSync } from 'node:fs'
+import { prepare } from './start.mjs'
+
+const CHROMIUM = '/usr/bin/chromium'
+const RESULTS = 'test-results/vitest.json'
+
+prepare()
+installChromium()
+let passed = 0
+let failed = 0
+step('lint', 'npx', ['eslint', '.', '--max-warnings', '0'])
+step('types', 'npx', ['nuxt', 'typecheck'])
+tests()
+console.log(`${passed} passed, ${failed} failed`)
+process.exit(failed > 0 ? 1 : 0)
+
+function step(name, command, args) {
+  console.log(`\n== ${name}`)
+  const { status } = spawnSync(command, args, { stdio: 'inherit' })
+  if (status === 0) passed++
+  else failed++
+}
+
+function tests() {
+  rmSync(RESULTS, { force: true })
+  console.log('\n== tests')
+  const { status } = spawnSync('npx', ['vitest', 'run', '--reporter=default', '--reporter=json', `--outputFile.json=${RESULTS}`], { stdio: 'inherit' })
+  const results = existsSync(RESULTS) ? JSON.parse(readFileSync(RESULTS, 'utf8')) : { numPassedTests: 0, numFailedTests: 0 }
+  passed += results.numPassedTests
+  failed += results.numFailedTests
+  // A run may fail without a failed test: an error outside one, or a file that can't be read.
+  if (status !== 0 && results.numFailedTests === 0) failed++
+}
+
+function installChromium() {
+  if (existsSync(CHROMIUM)) return
+  if (process.getuid?.() !== 0) {
+    console.error(`Browser tests need Debian's chromium at ${CHROMIUM}: apt-get install chromium`)
+    process.exit(1)
+  }
+  console.log('Installing chromium …')
+  for (const args of [['update', '-q'], ['install', '-y', '-q', '--no-install-recommends', 'chromium']]) {
+    if (spawnSync('apt-get', args, { stdio: ['ignore', 'ignore', 'inherit'], env: { ...process.env, DEBIAN_FRONTEND: 'noninteractive' } }).status !== 0) process.exit(1)
+  }
+}

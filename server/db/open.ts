@@ -1,0 +1,78 @@
+import { chmodSync, mkdirSync } from 'node:fs'
+import { join } from 'node:path'
+import Sqlite from 'better-sqlite3'
+import { drizzle, type BetterSQLite3Database } from 'drizzle-orm/better-sqlite3'
+import type { MigrationMeta } from 'drizzle-orm/migrator'
+import { migrate } from './migrate'
+import * as schema from './schema'
+import { triggers } from './triggers'
+
+export type Database = BetterSQLite3Database<typeof schema>
+export type LaboratoryKind = 'demo' | 'lab'
+
+export interface OpenDatabase {
+  db: Database
+  sqlite: Sqlite.Database
+  close: () => void
+}
+
+/**
+ * Opens the laboratory in `folder` (made where it is missing, 0700), refuses a second process on it, migrates it, and
+ * holds it to its kind: a real laboratory never turns into a demo or back.
+ */
+export async function openDatabase(folder: string, kind: LaboratoryKind, migrations: MigrationMeta[]): Promise<OpenDatabase> {
+  for (const path of [folder, join(folder, 'originals'), join(folder, 'incoming'), join(folder, 'copies')]) {
+    mkdirSync(path, { recursive: true, mode: 0o700 })
+    chmodSync(path, 0o700)
+  }
+  const lock = lockFolder(folder)
+  const path = join(folder, 'steelyard.db')
+  const sqlite = new Sqlite(path)
+  chmodSync(path, 0o600)
+  sqlite.pragma('journal_mode = WAL')
+  sqlite.pragma('synchronous = NORMAL')
+  sqlite.pragma('busy_timeout = 5000')
+  sqlite.pragma('foreign_keys = ON')
+  sqlite.pragma('wal_autocheckpoint = 4000')
+
+  const close = () => {
+    sqlite.close()
+    lock.close()
+  }
+  try {
+    await migrate(sqlite, migrations, async () => {
+      const copy = join(folder, 'copies', `before-migration-${new Date().toISOString().replaceAll(':', '-')}.db`)
+      await sqlite.backup(copy)
+      chmodSync(copy, 0o600)
+    })
+    sqlite.exec(triggers)
+    const db = drizzle(sqlite, { schema, casing: 'snake_case' })
+    holdKind(db, kind, folder)
+    return { db, sqlite, close }
+  }
+  catch (error) {
+    close()
+    throw error
+  }
+}
+
+/** SQLite holds the lock, so it goes with the process, however that ends. */
+function lockFolder(folder: string): Sqlite.Database {
+  const path = join(folder, 'lock.db')
+  const lock = new Sqlite(path, { timeout: 3000 })
+  chmodSync(path, 0o600)
+  try {
+    lock.exec('BEGIN EXCLUSIVE')
+    return lock
+  }
+  catch {
+    lock.close()
+    throw new Error(`Another Steelyard already runs on ${folder}. Stop it first, or name another folder in STEELYARD_DATA.`)
+  }
+}
+
+function holdKind(db: Database, kind: LaboratoryKind, folder: string) {
+  const row = db.query.laboratory.findFirst({ where: (table, { eq }) => eq(table.name, 'kind') }).sync()
+  if (!row) db.insert(schema.laboratory).values({ name: 'kind', value: kind }).run()
+  else if (row.value !== kind) throw new Error(`${folder} holds a ${row.value === 'demo' ? 'demo' : 'real'} laboratory; it cannot be opened as a ${kind === 'demo' ? 'demo' : 'real'} one.`)
+}

@@ -1,0 +1,28 @@
+import type { Transferable } from 'node:worker_threads'
+import type { Database } from '../db/open'
+import type { jobs } from '../db/schema'
+
+export type Job = typeof jobs.$inferSelect
+
+export interface JobContext { db: Database, folder: string }
+
+/** One kind of long work: what its worker needs, and how its result is kept. */
+export interface JobKind<Input, Result> {
+  /** Name of the file in server/workers. */
+  worker: string
+  /** Megabytes the worker's heap may take. */
+  heapMb: number
+  /** Reads what the worker needs; runs just before it starts. Throw a DomainError where there is nothing to do. */
+  prepare: (context: JobContext, input: Input, job: Job) => { data: unknown, transfer?: Transferable[] }
+  /** Keeps the result, within the transaction that ends the job; returns what it made. */
+  finish: (context: JobContext, input: Input, result: Result, job: Job) => string | null
+  /** Tidies what the job leaves when it fails for good or is cancelled, within the same transaction. */
+  abandon?: (context: JobContext, input: Input, reason: string, job: Job) => void
+}
+
+/** What a worker may post: progress as often as it likes (the runner thins it), then one result or refusal. */
+export type WorkerMessage<Result> =
+  | { progress: number, message: string }
+  | { result: Result }
+  /** A fault of the input, in words for the person. */
+  | { refusal: string }

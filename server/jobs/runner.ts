@@ -1,0 +1,148 @@
+import { availableParallelism } from 'node:os'
+import { Worker } from 'node:worker_threads'
+import { and, asc, eq, inArray } from 'drizzle-orm'
+import { jobs } from '../db/schema'
+import { DomainError } from '../domain/DomainError'
+import type { Job, JobContext, JobKind, WorkerMessage } from './kind'
+
+const MAX_ATTEMPTS = 3 // the first, and twice more where the server was killed
+const MAX_WAITING = 3
+const PROGRESS_MS = 250
+
+// A runner holds kinds of different inputs; each kind only ever meets its own.
+// eslint-disable-next-line @typescript-eslint/no-explicit-any
+type AnyKind = JobKind<any, any>
+
+export interface NewJob { kind: string, studyId: string | null, input: unknown, personId: string }
+
+/** Runs the job table in worker threads, one core left free (at least one at once). */
+export class Jobs {
+  private readonly running = new Map<string, Worker>()
+  private readonly atOnce = Math.max(1, availableParallelism() - 1)
+  private stopped = false
+
+  constructor(
+    private readonly context: JobContext,
+    private readonly kinds: Record<string, AnyKind>,
+    private readonly workerSources: Record<string, string>,
+  ) {}
+
+  /** At start-up: what was running when the server ended is queued again, at most twice. */
+  resume() {
+    const { db } = this.context
+    for (const job of db.select().from(jobs).where(eq(jobs.status, 'running')).all()) {
+      if (job.attempts < MAX_ATTEMPTS) db.update(jobs).set({ status: 'queued', progress: 0, message: 'Starts again: the server was stopped.' }).where(eq(jobs.id, job.id)).run()
+      else this.end(job, 'failed', 'Stopped: the server ended three times while this ran.')
+    }
+    this.next()
+  }
+
+  /** Adds a job. `unlimited` is for work that an upload itself starts; else three may wait a person. */
+  add(job: NewJob, { unlimited = false } = {}): Job {
+    const { db } = this.context
+    if (!unlimited) {
+      const open = db.select().from(jobs).where(and(eq(jobs.createdBy, job.personId), eq(jobs.kind, job.kind), inArray(jobs.status, ['queued', 'running']))).all()
+      if (open.length >= MAX_WAITING) throw new DomainError('tooMany', 'Three of your jobs are waiting already. Let one end, or cancel one.')
+    }
+    const row = db.insert(jobs).values({ kind: job.kind, studyId: job.studyId, input: job.input, createdBy: job.personId, message: 'Waiting for its turn.' }).returning().get()
+    setImmediate(() => this.next())
+    return row
+  }
+
+  /** Ends a job that waits or runs; nothing of it stays. */
+  cancel(jobId: string) {
+    const job = this.context.db.select().from(jobs).where(eq(jobs.id, jobId)).get()
+    if (!job || (job.status !== 'queued' && job.status !== 'running')) return
+    this.end(job, 'cancelled', 'Cancelled.')
+    void this.running.get(jobId)?.terminate()
+  }
+
+  /** Waits until nothing runs or waits: for scripts and tests. */
+  async idle() {
+    const open = () => this.context.db.select({ id: jobs.id }).from(jobs).where(inArray(jobs.status, ['queued', 'running'])).get()
+    while (!this.stopped && open()) await new Promise(resolve => setTimeout(resolve, 10))
+  }
+
+  async stop() {
+    this.stopped = true
+    await Promise.all([...this.running.values()].map(worker => worker.terminate()))
+  }
+
+  private next() {
+    if (this.stopped || this.running.size >= this.atOnce) return
+    const { db } = this.context
+    const job = db.select().from(jobs).where(eq(jobs.status, 'queued')).orderBy(asc(jobs.createdAt), asc(jobs.id)).get()
+    if (!job) return
+    db.update(jobs).set({ status: 'running', startedAt: new Date(), attempts: job.attempts + 1, message: 'Starting.' }).where(eq(jobs.id, job.id)).run()
+    this.start(job)
+    this.next()
+  }
+
+  private start(job: Job) {
+    const kind = this.kinds[job.kind]
+    const source = kind && this.workerSources[kind.worker]
+    if (!kind || !source) return this.end(job, 'failed', `This version does not know how to ${job.kind}.`)
+    try {
+      const { data, transfer } = kind.prepare(this.context, job.input, job)
+      const worker = new Worker(source, { eval: true, workerData: data, transferList: transfer, resourceLimits: { maxOldGenerationSizeMb: kind.heapMb } })
+      this.running.set(job.id, worker)
+      this.listen(job, kind, worker)
+    }
+    catch (error) {
+      this.fail(job, error)
+    }
+  }
+
+  private listen(job: Job, kind: AnyKind, worker: Worker) {
+    let lastProgress = 0
+    worker.on('message', (message: WorkerMessage<unknown>) => {
+      if (!this.isRunning(job)) return
+      if ('progress' in message) {
+        if (Date.now() - lastProgress < PROGRESS_MS) return
+        lastProgress = Date.now()
+        this.context.db.update(jobs).set({ progress: message.progress, message: message.message }).where(eq(jobs.id, job.id)).run()
+      }
+      else if ('refusal' in message) this.end(job, 'failed', message.refusal)
+      else this.keep(job, kind, message.result)
+    })
+    worker.on('error', error => this.fail(job, error))
+    worker.on('exit', () => {
+      this.running.delete(job.id)
+      if (this.isRunning(job) && !this.stopped) this.end(job, 'failed', 'The work ended without a result. Please start it again.')
+      this.next()
+    })
+  }
+
+  /** All or nothing: the result and the job's end are one transaction. */
+  private keep(job: Job, kind: AnyKind, result: unknown) {
+    const { db } = this.context
+    try {
+      db.transaction(() => {
+        const resultId = kind.finish(this.context, job.input, result, job)
+        db.update(jobs).set({ status: 'done', progress: 1, message: 'Done.', resultId, endedAt: new Date() }).where(eq(jobs.id, job.id)).run()
+      }, { behavior: 'immediate' })
+    }
+    catch (error) {
+      this.fail(job, error)
+    }
+  }
+
+  private fail(job: Job, error: unknown) {
+    if (error instanceof DomainError) return this.end(job, 'failed', error.message)
+    console.error(`[job ${job.id}] ${job.kind}`, error)
+    const outOfMemory = error instanceof Error && 'code' in error && error.code === 'ERR_WORKER_OUT_OF_MEMORY'
+    this.end(job, 'failed', outOfMemory ? 'This is more than the memory set for one job. Use fewer or smaller tables.' : 'Something went wrong in this job. Nothing of it was kept.')
+  }
+
+  private end(job: Job, status: 'failed' | 'cancelled', message: string) {
+    const { db } = this.context
+    db.transaction(() => {
+      this.kinds[job.kind]?.abandon?.(this.context, job.input, message, job)
+      db.update(jobs).set({ status, message, endedAt: new Date() }).where(eq(jobs.id, job.id)).run()
+    }, { behavior: 'immediate' })
+  }
+
+  private isRunning(job: Job) {
+    return this.context.db.select({ status: jobs.status }).from(jobs).where(eq(jobs.id, job.id)).get()?.status === 'running'
+  }
+}

@@ -1,0 +1,1 @@
+export type JobStatus = 'queued' | 'running' | 'done' | 'failed' | 'cancelled'

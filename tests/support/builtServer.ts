@@ -1,0 +1,54 @@
+import { spawn, type ChildProcess } from 'node:child_process'
+import { mkdtempSync, rmSync } from 'node:fs'
+import { tmpdir } from 'node:os'
+import { join } from 'node:path'
+import { fileURLToPath } from 'node:url'
+
+export interface BuiltServer { url: string, folder: string, pid: number, output: () => string, stop: () => Promise<void>, kill: () => Promise<void> }
+
+const entry = fileURLToPath(new URL('../../.output/server/index.mjs', import.meta.url))
+let nextPort = 4300 + (process.pid % 400) * 10
+
+/** Starts the built server on a loopback port of its own, with a data folder of its own unless one is given. */
+export async function startBuiltServer({ kind = 'lab', folder = '', env = {} }: { kind?: 'demo' | 'lab', folder?: string, env?: Record<string, string> } = {}): Promise<BuiltServer> {
+  const data = folder || mkdtempSync(join(tmpdir(), 'steelyard-built-'))
+  const port = nextPort++
+  let output = ''
+  const child = spawn(process.execPath, [entry], {
+    env: { ...process.env, NODE_ENV: 'production', HOST: '127.0.0.1', NITRO_HOST: '127.0.0.1', PORT: String(port), NITRO_PORT: String(port), NITRO_SHUTDOWN_TIMEOUT: '2000', STEELYARD_KIND: kind, STEELYARD_DATA: data, ...env },
+  })
+  child.stdout.on('data', (chunk: Buffer) => output += chunk)
+  child.stderr.on('data', (chunk: Buffer) => output += chunk)
+  const url = `http://127.0.0.1:${port}`
+  await answering(url, child, () => output)
+  const end = (signal: NodeJS.Signals) => new Promise<void>((resolve) => {
+    if (child.exitCode !== null || child.signalCode !== null) return resolve()
+    child.once('exit', () => resolve())
+    child.kill(signal)
+  })
+  return {
+    url,
+    folder: data,
+    pid: child.pid ?? 0,
+    output: () => output,
+    kill: () => end('SIGKILL'),
+    stop: async () => {
+      await end('SIGTERM')
+      if (!folder) rmSync(data, { recursive: true, force: true })
+    },
+  }
+}
+
+async function answering(url: string, child: ChildProcess, output: () => string) {
+  for (let tries = 0; tries < 1200; tries++) {
+    if (child.exitCode !== null) throw new Error(`The server ended at once:\n${output()}`)
+    try {
+      await fetch(`${url}/api/me`)
+      return
+    }
+    catch {
+      await new Promise(resolve => setTimeout(resolve, 100))
+    }
+  }
+  throw new Error(`The server did not answer within two minutes:\n${output()}`)
+}
