@@ -13,7 +13,8 @@ export interface OneSidedOutcome {
 
 /**
  * Second rule of METHODS 9: one side present, the other not found. `blankCountsAsFloor` where the other side was detected but
- * is not above blank: the blank's level then stands for its floor.
+ * is not above blank: the blank's level then stands for its floor, and the present side must also stand reachLimit times
+ * above what the other shows, or a limit crossed by a hair would make a one-sided feature of two like ones.
  */
 export function oneSided(summary: SideSummary, settings: ComparisonSettings, i: number, present: 'A' | 'B', floors: { A: SideFloors, B: SideFloors }, blankCountsAsFloor: boolean): OneSidedOutcome {
   const other = present === 'A' ? 'B' : 'A'
@@ -23,6 +24,8 @@ export function oneSided(summary: SideSummary, settings: ComparisonSettings, i: 
   if (neighbour >= 0) return unsettled(REASON.neighbour)
   if (floors.A.unprovable.includes(true) || floors.B.unprovable.includes(true)) return unsettled(REASON.gapFilled)
   if (!(reach >= settings.reachLimit)) return unsettled(REASON.belowReach)
+  const shownBesideBlank = blankCountsAsFloor ? sideOf(summary, other).median[i]! : 0
+  if (sideOf(summary, present).median[i]! < settings.reachLimit * shownBesideBlank) return unsettled(REASON.blankOverlap)
   return { verdict: present === 'A' ? VERDICT.onlyA : VERDICT.onlyB, reason: REASON.foundOnly, reach, neighbour }
 }
 

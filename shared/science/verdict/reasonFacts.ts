@@ -20,7 +20,8 @@ export class ReasonFacts {
     const detected = (side === 'a' ? this.columns.detectedA : this.columns.detectedB)[this.i]!
     const preparations = side === 'a' ? this.judged.preparationsA : this.judged.preparationsB
     const injections = (side === 'a' ? this.columns.injectionsA : this.columns.injectionsB)[this.i]!
-    return { name: this.names[side], detected, injections, found: `${detected} of ${counted(preparations, 'preparation')} of ${this.names[side]}` }
+    const level = (side === 'a' ? this.columns.levelA : this.columns.levelB)[this.i]!
+    return { name: this.names[side], detected, injections, level, found: `${detected} of ${counted(preparations, 'preparation')} of ${this.names[side]}` }
   }
 
   /** The side that counts as not found, where one does. */

@@ -35,4 +35,5 @@ const SENTENCES: Record<Reason, (facts: ReasonFacts) => string> = {
   smallButCertain: f => `${f.ratio}; a difference is certain (q = ${f.q}), but whether it reaches ${f.fold} is open. ${f.interval}.`,
   assumedBetween: f => `${f.ratio}; ${f.assumed}, at least ${foldTimes(f.assumedLimit)} is called more and ${f.assumedLevelPhrase}. ${f.interval}.`,
   noSpread: f => `${f.ratio}, but there is no spread between replicates: the same data twice?`,
+  blankOverlap: f => `Found in ${f.shown.found}, ${f.hiddenPhrase}; but ${f.shown.name} holds only ${times(f.shown.level / f.hidden.level)} of what ${f.hidden.name} shows, and at least ${times(f.settings.reachLimit)} is asked.`,
 }

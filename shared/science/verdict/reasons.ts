@@ -7,6 +7,7 @@ export const REASONS = [
   'moreTested', 'moreAssumed',
   'levelTested', 'levelSmallDifference', 'levelAssumed',
   'notCertain', 'smallNotLevel', 'smallButCertain', 'assumedBetween', 'noSpread',
+  'blankOverlap',
 ] as const
 export type Reason = (typeof REASONS)[number]
 
@@ -36,6 +37,7 @@ export const REASON_LABELS: Record<Reason, string> = {
   smallButCertain: 'different, by how much is open',
   assumedBetween: 'between limits, precision assumed',
   noSpread: 'no spread between replicates',
+  blankOverlap: 'near the other side, which is not above blank',
 }
 
 /** How a ratio was judged. Codes are stored: append, never reorder. */
