@@ -1,5 +1,7 @@
 import { blob, index, integer, real, sqliteTable, text } from 'drizzle-orm/sqlite-core'
-import type { MassKind, Measure, TableLayout, TableProposal } from '../../../shared/science/table/layout'
+import type { MassKind, Measure, TableLayout } from '../../../shared/science/table/layout'
+import type { RememberedAnswers } from '../../../shared/science/table/rememberAnswers'
+import type { ProposalBasis } from '../../../shared/science/table/tableProposal'
 import { createdAt, id, moment } from './columns'
 import { people } from './people'
 import { samples, studies } from './studies'
@@ -17,9 +19,10 @@ export const originals = sqliteTable('originals', {
 export const layouts = sqliteTable('layouts', {
   id: id(),
   name: text().notNull(),
-  /** The shape it reads: a digest of the header as normalised. */
+  /** The shape it reads: the words of its header (shapeFingerprint). */
   fingerprint: text().notNull(),
-  layout: text({ mode: 'json' }).$type<TableLayout>().notNull(),
+  /** What a person said of files of this shape; the rest each file says itself. */
+  layout: text({ mode: 'json' }).$type<RememberedAnswers>().notNull(),
   createdBy: text().notNull().references(() => people.id),
   createdAt: createdAt(),
 }, table => [index('layouts_fingerprint').on(table.fingerprint)])
@@ -36,7 +39,8 @@ export const uploads = sqliteTable('uploads', {
   bytes: integer().notNull(),
   status: text().$type<UploadStatus>().notNull(),
   fingerprint: text(),
-  proposal: text({ mode: 'json' }).$type<TableProposal>(),
+  /** What its proposal is made from; null until it was looked through. */
+  proposal: text({ mode: 'json' }).$type<ProposalBasis>(),
   /** The layout a person or a remembered layout decided. */
   layout: text({ mode: 'json' }).$type<TableLayout>(),
   /** Why it was refused, or what was noticed (the same content stands already), as a sentence. */

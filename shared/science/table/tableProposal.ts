@@ -1,4 +1,8 @@
 import type { LayoutAnswers, TableLayout } from './layout'
+import type { TableSurvey } from './tableSurvey'
+
+/** What a proposal is made from, to be kept while a file waits: what was found in it and what a person, or a remembered layout, has said. */
+export interface ProposalBasis { survey: TableSurvey, answers: LayoutAnswers, remembered: boolean }
 
 /** A choice a person has; value is what goes into the answers' field. */
 export interface LayoutChoice { value: string | number | boolean, label: string }
