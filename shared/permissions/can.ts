@@ -23,3 +23,8 @@ export function canSeeWork(person: Pick<Holder, 'id'>, work: { practice: boolean
 export function canExportWork(person: Holder, work: { practice: boolean, createdBy: string }): boolean {
   return canSeeWork(person, work) && (can(person, 'export') || work.practice)
 }
+
+/** Flags on official work need the right; on one's own practice the maker sets them. */
+export function canFlagWork(person: Holder, work: { practice: boolean, createdBy: string }): boolean {
+  return canSeeWork(person, work) && (work.practice || can(person, 'flag'))
+}

@@ -1,5 +1,5 @@
 import { z } from 'zod'
-import { requiredText } from './fields'
+import { idField, requiredText } from './fields'
 
 export const flagKinds = ['ofInterest', 'oneSideOnly', 'contaminant', 'artefact', 'askAgain'] as const
 export type FlagKind = (typeof flagKinds)[number]
@@ -11,9 +11,20 @@ export const flagKindNames: Record<FlagKind, string> = {
   askAgain: 'ask again',
 }
 
+/** As many as one act may flag or take back. */
+const MOST_AT_ONCE = 1000
+
+/** One flag, with one reason, on one feature or on many at once. */
 export const flagSchema = z.object({
-  featureIndex: z.number().int().min(0),
+  featureIndexes: z.array(z.number().int().min(0)).min(1, 'Choose a feature.').max(MOST_AT_ONCE, `At most ${MOST_AT_ONCE} features at once.`),
   kind: z.enum(flagKinds, { error: 'Choose a kind of flag.' }),
   reason: requiredText(500),
 })
 export type FlagInput = z.infer<typeof flagSchema>
+
+/** Taking flags back, or setting them again. */
+export const flagChangeSchema = z.object({
+  flagIds: z.array(idField).min(1, 'Choose a flag.').max(MOST_AT_ONCE),
+  takenBack: z.boolean(),
+})
+export type FlagChange = z.infer<typeof flagChangeSchema>

@@ -19,6 +19,8 @@ export interface RightsRow {
   ok?: number
   body?: (fixture: Fixture) => unknown
   query?: string
+  /** Where a parameter of the address is filled from another id of the fixture: { alignmentId: 'practiceAlignmentId' }. */
+  from?: Record<string, string>
   /** Where one asker differs from the rule. */
   except?: Partial<Record<Asker, number>>
   /** Runs before each request, on the same database as the server. */
@@ -64,6 +66,6 @@ export function routesIn(folder: string, path = '/api'): string[] {
 
 export function addressOf(row: RightsRow, fixture: Fixture): { method: string, path: string } {
   const [method = '', pattern = ''] = row.route.split(' ')
-  const path = pattern.replaceAll(/\[(\w+)\]/g, (_, name: string) => fixture[name] ?? `no-${name}-in-the-fixture`)
+  const path = pattern.replaceAll(/\[(\w+)\]/g, (_, name: string) => fixture[row.from?.[name] ?? name] ?? `no-${name}-in-the-fixture`)
   return { method, path: row.query ? `${path}?${row.query}` : path }
 }

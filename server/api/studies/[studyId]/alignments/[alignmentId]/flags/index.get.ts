@@ -1,0 +1,8 @@
+import { findVisibleAlignment } from '../../../../../../domain/alignment/findVisibleAlignment'
+import { listFlags } from '../../../../../../domain/flag/listFlags'
+
+export default defineRoute(async (event) => {
+  const { db, person, study } = await requireStudy(event)
+  const alignment = findVisibleAlignment(db, study.id, readParam(event, 'alignmentId'), person)
+  return listFlags(db, alignment.id)
+})
