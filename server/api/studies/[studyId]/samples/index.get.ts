@@ -1,0 +1,6 @@
+import { readSheet } from '../../../../domain/sample/readSheet'
+
+export default defineRoute(async (event) => {
+  const { db, study } = await requireStudy(event)
+  return readSheet(db, study.id)
+})
