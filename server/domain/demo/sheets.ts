@@ -35,16 +35,18 @@ export const juiceSheet = inRunOrder([
 
 /** Two months later: one bottle of each, another batch of the carton. */
 export const laterJuiceSheet = inRunOrder([
-  other('Blank-solvent-2', 'solventBlank'),
+  other('Blank-process-2', 'processBlank'),
   weighed(['Millrace-4', 'A', 1004, 10, 2, 5], 'bottle M4'),
   weighed(['Tallow-Lane-4', 'B', 1978, 10, 5, 5], 'bottle T4'),
 ], 'run 2')
 
-/** Peel of oranges from a grove and from a market stall, two preparations each. */
+/** Peel of oranges from a grove and from a market stall, three preparations each. */
 export const peelSheet = inRunOrder([
   other('Peel-blank', 'processBlank'),
   weighed(['Grove-1', 'A', 502, 10, 1, 5], 'peel G1'),
   weighed(['Market-1', 'B', 497, 10, 1, 5], 'peel K1'),
   weighed(['Grove-2', 'A', 511, 10, 1, 5], 'peel G2'),
   weighed(['Market-2', 'B', 489, 10, 1, 5], 'peel K2'),
+  weighed(['Market-3', 'B', 508, 10, 1, 5], 'peel K3'),
+  weighed(['Grove-3', 'A', 494, 10, 1, 5], 'peel G3'),
 ], 'run 3')

@@ -48,10 +48,10 @@ export function simulateTable(ions: readonly DemoIon[], injection: Injection, ra
     if (counts > 0 && !missed && split) add(ion.mz, minutes + apart, counts * 0.3, -1)
   })
   for (const mz of wholeRunIons[injection.polarity]) {
-    for (let i = 0; i < 24; i++) add(mz, random.between(0.4, DEMO_RUN_MINUTES), 1_500 * Math.exp(random.normal(0, 0.4)), -1)
+    for (let i = 0; i < 10; i++) add(mz, random.between(0.4, DEMO_RUN_MINUTES), 1_500 * Math.exp(random.normal(0, 0.4)), -1)
   }
   for (const mz of frontIons[injection.polarity]) add(mz, random.between(0.52, 0.72), 30_000 * Math.exp(random.normal(0, 0.5)), -1)
-  for (let i = 0; i < 70; i++) add(Math.exp(random.normal(5.8, 0.5)), random.between(0.5, DEMO_RUN_MINUTES), 1_100 * Math.exp(random.normal(0, 0.5)), -1)
+  for (let i = 0; i < 36; i++) add(Math.exp(random.normal(5.8, 0.5)), random.between(0.5, DEMO_RUN_MINUTES), 1_100 * Math.exp(random.normal(0, 0.5)), -1)
   rows.sort((a, b) => a[0] - b[0] || a[1] - b[1])
   return { mz: rows.map(row => row[0]), retentionMinutes: rows.map(row => row[1]), intensity: rows.map(row => row[2]), ion: rows.map(row => row[3]) }
 }

@@ -40,11 +40,11 @@ const peelMethod: MethodInput = {
 const juiceCompounds: readonly DemoCompound[] = [
   ...appleCompounds,
   ...negativeBackground,
-  ...inventCompounds({ level: 330, between: 60, moreA: 48, moreB: 48, onlyA: 14, onlyB: 5, solvent: 26, process: 18, aboveBlankInA: 7 }, seededRandom('juices invented'), 'negative'),
+  ...inventCompounds({ level: 235, between: 42, moreA: 27, moreB: 34, onlyA: 8, onlyB: 3, solvent: 16, process: 14, aboveBlankInA: 6 }, seededRandom('juices invented'), 'negative'),
 ]
 
 /** The demo laboratory's studies, oldest first. */
-export const demoStudies: readonly DemoStudy[] = [
+export const demoStudies: readonly [DemoStudy, DemoStudy, DemoStudy] = [
   {
     seed: 'juices',
     polarity: 'negative',
