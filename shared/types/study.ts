@@ -23,7 +23,7 @@ export interface StudyList {
   archived: number
 }
 
-export interface StudyMember { id: string, name: string, roles: Role[] }
+export interface StudyMember { id: string, name: string, roles: Role[], closed: boolean }
 
 export interface Method extends MethodInput { id: string }
 

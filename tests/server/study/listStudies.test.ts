@@ -33,7 +33,7 @@ describe('a new study', () => {
   it('has its maker as a member, and the method made with it', () => {
     const view = studyView(laboratory.db, findVisibleStudy(laboratory.db, openId, analyst), analyst)
     expect(view).toMatchObject({ title: 'Two apple juices', sideAName: 'A', sideBName: 'B', restricted: false, createdByName: analyst.name })
-    expect(view.members).toEqual([{ id: analyst.id, name: analyst.name, roles: ['analyst'] }])
+    expect(view.members).toEqual([{ id: analyst.id, name: analyst.name, roles: ['analyst'], closed: false }])
     expect(view.method).toMatchObject({ name: 'C18, negative', polarity: 'negative', voidMinutes: null, divertWindows: [] })
     expect(view.counts).toEqual({ samples: 0, tables: 0, alignments: 0, comparisons: 0 })
   })

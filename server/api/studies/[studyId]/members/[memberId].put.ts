@@ -1,0 +1,6 @@
+import { addMember } from '../../../../domain/study/members'
+
+export default defineRoute(async (event) => {
+  const { db, study, person } = await requireStudy(event, 'editStudy')
+  return addMember(db, study, readParam(event, 'memberId'), person)
+})
