@@ -3,6 +3,8 @@ import { can, type Action, type Role } from '#shared/permissions'
 export interface Me {
   person: { id: string, name: string, signInName: string, roles: Role[] } | null
   demo: boolean
+  /** The laboratory still waits for its first account. */
+  first: boolean
 }
 
 /** Who is signed in. One request a page load, shared by all who ask. */
@@ -12,6 +14,7 @@ export async function useMe() {
   return {
     me,
     demo: computed(() => data.value?.demo ?? false),
+    first: computed(() => data.value?.first ?? false),
     /** The same table the server asks; here it only decides what to show. */
     may: (action: Action) => me.value !== null && can(me.value, action),
     refresh,

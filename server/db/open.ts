@@ -8,6 +8,8 @@ import * as schema from './schema'
 import { triggers } from './triggers'
 
 export type Database = BetterSQLite3Database<typeof schema>
+/** The database, or the transaction under way on it. */
+export type Connection = Pick<Database, 'select' | 'insert' | 'update' | 'delete' | 'query'>
 export type LaboratoryKind = 'demo' | 'lab'
 
 export interface OpenDatabase {

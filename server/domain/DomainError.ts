@@ -10,5 +10,12 @@ export class DomainError extends Error {
   }
 }
 
+/** Too much at once or too often: says when to try again, and the answer carries it as Retry-After. */
+export class TooManyError extends DomainError {
+  constructor(sentence: string, readonly retryAfterSeconds: number) {
+    super('tooMany', sentence)
+  }
+}
+
 /** What may not be seen and what is not there look the same. */
 export const notFound = () => new DomainError('notFound', 'There is nothing at this address, or you may not see it.')

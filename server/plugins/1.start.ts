@@ -1,9 +1,11 @@
 import migrations from '#migrations'
 import workerSources from '#workers'
-import { openDatabase } from '../db/open'
+import { openDatabase, type Database } from '../db/open'
 import { jobKinds } from '../jobs'
 import { Jobs } from '../jobs/runner'
-import { dataFolder, laboratoryKind } from '../utils/environment'
+import { addDemoAccounts } from '../domain/demo/addDemoAccounts'
+import { issueFirstCode } from '../domain/person/firstLabLead'
+import { addressProblem, dataFolder, laboratoryKind, ownAddress } from '../utils/environment'
 import { sealingSecret } from '../utils/sealingSecret'
 import { emptyIncoming } from '../domain/table/incoming'
 
@@ -17,6 +19,9 @@ export default defineNitroPlugin((nitro) => {
   })
 
   async function start() {
+    const { stop, notice } = addressProblem(process.env)
+    if (stop) throw new Error(stop)
+    if (notice) console.warn(notice)
     const open = await openDatabase(folder, kind, migrations)
     emptyIncoming(folder)
     // Read by nuxt-auth-utils at each request.
@@ -24,6 +29,14 @@ export default defineNitroPlugin((nitro) => {
     const jobs = new Jobs({ db: open.db, folder }, jobKinds, workerSources)
     setLaboratory({ ...open, kind, folder, jobs })
     jobs.resume()
+    await welcome(open.db)
+  }
+
+  /** A demo laboratory has its accounts at once; a real one without any shows how to make the first. */
+  async function welcome(db: Database) {
+    if (kind === 'demo') return addDemoAccounts(db, passwordHasher)
+    const code = issueFirstCode(db)
+    if (code) console.log(`This laboratory has no account yet. Open ${ownAddress()}/first and make the first lab lead with this code (24 hours, once):\n\n    ${code}\n`)
   }
 
   nitro.hooks.hook('request', () => opening)

@@ -1,5 +1,5 @@
 import type { EventHandlerRequest, H3Event } from 'h3'
-import { DomainError, type DomainErrorKind } from '../domain/DomainError'
+import { DomainError, TooManyError, type DomainErrorKind } from '../domain/DomainError'
 
 const statusOf: Record<DomainErrorKind, number> = {
   invalid: 400,
@@ -26,6 +26,7 @@ export function defineRoute<T>(handler: (event: H3Event<EventHandlerRequest>) =>
 }
 
 function toHttpError(event: H3Event, error: unknown) {
+  if (error instanceof TooManyError) setResponseHeader(event, 'retry-after', error.retryAfterSeconds)
   if (error instanceof DomainError) {
     return createError({ statusCode: statusOf[error.kind], message: error.message, data: { issues: error.issues } })
   }

@@ -9,8 +9,8 @@ export interface PersonContext { db: Database, person: Person }
 
 /** Who asks, read from the session's row on each request; null for a visitor. */
 export async function readPerson(event: H3Event): Promise<Person | null> {
-  const { secure } = await getUserSession(event)
-  return secure?.sid ? findSessionPerson(useLaboratory().db, secure.sid) : null
+  const secret = await readSessionSecret(event)
+  return secret ? findSessionPerson(useLaboratory().db, secret) : null
 }
 
 /** A signed-in person, with the right where one is named: 401, then 403. */

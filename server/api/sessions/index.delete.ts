@@ -1,9 +1,9 @@
-import { endSession } from '../../domain/session/sessions'
+import { signOut } from '../../domain/session/sessions'
 
 export default defineRoute(async (event) => {
-  const { db } = await requirePerson(event)
-  const { secure } = await getUserSession(event)
-  if (secure?.sid) endSession(db, secure.sid)
+  const { db, person } = await requirePerson(event)
+  const secret = await readSessionSecret(event)
+  if (secret) signOut(db, secret, person)
   await clearUserSession(event)
   return { signedOut: true }
 })

@@ -1,4 +1,4 @@
-import { DomainError } from '../DomainError'
+import { TooManyError } from '../DomainError'
 
 /** What the server uses to hash and check; the module's scrypt at run time, a cheap one in tests. */
 export interface PasswordHasher {
@@ -6,12 +6,15 @@ export interface PasswordHasher {
   verify: (hash: string, password: string) => Promise<boolean>
 }
 
-/** At most two verifications at once: each takes 128 MB. */
+/**
+ * At most two verifications at once: each takes 128 MB. Passwords are normalised first, so that the same letters
+ * typed on another keyboard (é as one sign or as two) are the same password.
+ */
 export function limitAtOnce(hasher: PasswordHasher, atOnce = 2): PasswordHasher {
   let busy = 0
   const waiting: (() => void)[] = []
   const run = async <T>(work: () => Promise<T>) => {
-    if (waiting.length > 50) throw new DomainError('tooMany', 'Too many people are signing in at this moment. Please try again.')
+    if (waiting.length > 50) throw new TooManyError('Too many people are signing in at this moment. Please try again in a few seconds.', 5)
     if (busy >= atOnce) await new Promise<void>(resolve => waiting.push(resolve))
     busy++
     try {
@@ -23,7 +26,7 @@ export function limitAtOnce(hasher: PasswordHasher, atOnce = 2): PasswordHasher 
     }
   }
   return {
-    hash: password => run(() => hasher.hash(password)),
-    verify: (hash, password) => run(() => hasher.verify(hash, password)),
+    hash: password => run(() => hasher.hash(password.normalize('NFKC'))),
+    verify: (hash, password) => run(() => hasher.verify(hash, password.normalize('NFKC'))),
   }
 }

@@ -1,1 +1,0 @@
-ALTER TABLE `samples` ADD `written_by` text DEFAULT '{}' NOT NULL;
