@@ -1,6 +1,6 @@
 import { index, integer, primaryKey, real, sqliteTable, text } from 'drizzle-orm/sqlite-core'
 import type { Polarity, TimeWindow } from '../../../shared/schemas/method'
-import type { AmountUnit, SampleKind, Side } from '../../../shared/schemas/sample'
+import type { AmountUnit, SampleField, SampleKind, Side } from '../../../shared/schemas/sample'
 import { createdAt, id, moment } from './columns'
 import { people } from './people'
 
@@ -60,5 +60,7 @@ export const samples = sqliteTable('samples', {
   injectionUl: real(),
   runOrder: integer(),
   batch: text().notNull().default(''),
+  /** Who wrote each cell last, so that two people at one sheet can be told of each other. */
+  writtenBy: text({ mode: 'json' }).$type<Partial<Record<SampleField, string>>>().notNull().default({}),
   createdAt: createdAt(),
 }, table => [index('samples_study').on(table.studyId)])

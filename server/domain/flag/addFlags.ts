@@ -5,6 +5,7 @@ import { record } from '../activity/record'
 import type { VisibleAlignment } from '../alignment/findVisibleAlignment'
 import { DomainError } from '../DomainError'
 import type { Person } from '../person/person'
+import { touchStudy } from '../study/touchStudy'
 
 /** Sets one flag on each of the features named, with one reason; returns the ids of the flags. */
 export function addFlags(db: Database, alignment: VisibleAlignment, input: FlagInput, person: Person): { flagIds: string[] } {
@@ -18,6 +19,7 @@ export function addFlags(db: Database, alignment: VisibleAlignment, input: FlagI
     const flagIds = features.map(featureIndex => tx.insert(flags).values({
       studyId: alignment.studyId, alignmentId: alignment.id, featureIndex, kind: input.kind, reason: input.reason, createdBy: person.id,
     }).returning({ id: flags.id }).get().id)
+    if (!alignment.practice) touchStudy(tx, alignment.studyId)
     record(tx, { personId: person.id, action: 'flag features', studyId: alignment.studyId, subjectId: alignment.id, detail: flagDetail(alignment, features, input) })
     return { flagIds }
   })

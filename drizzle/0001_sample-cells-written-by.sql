@@ -1,0 +1,1 @@
+ALTER TABLE `samples` ADD `written_by` text DEFAULT '{}' NOT NULL;

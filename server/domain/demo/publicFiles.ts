@@ -1,0 +1,30 @@
+import { exportFiles, type DemoFile } from './exportFiles'
+import { sheetCsv } from './sheetCsv'
+import { demoStudies } from './studies'
+
+const README = `Files to try an upload with
+===========================
+
+All of it is invented; the juices and their makers do not exist.
+
+sample-sheet.csv   the sample sheet: open it in a spreadsheet, copy all of it, and paste it into the sheet of a new study
+the other *.csv    one feature table a file: drop all of them at once on the study's page for tables
+
+Millrace-1 to -3      three bottles of a cloudy pressed apple juice: side A
+Tallow-Lane-1 to -3   three cartons of a heated apple juice: side B
+Blank-…               a solvent blank, and a process blank that went through the work-up without juice
+QC-1 to -6            the pool of all six samples, injected between them
+Standard-1 and -2     a mixture of standards
+
+Each file is one injection in negative mode: m/z, retention time in minutes, peak area.
+`
+
+/** What lies in public/demo: the first study's tables, its sample sheet and a word on both. */
+export function publicDemoFiles(): DemoFile[] {
+  const [study] = demoStudies
+  return [
+    ...exportFiles(study),
+    { name: 'sample-sheet.csv', text: sheetCsv(study.sheet) },
+    { name: 'README.txt', text: README },
+  ]
+}
