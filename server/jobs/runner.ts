@@ -96,7 +96,7 @@ export class Jobs {
   private listen(job: Job, kind: AnyKind, worker: Worker) {
     let lastProgress = 0
     worker.on('message', (message: WorkerMessage<unknown>) => {
-      if (!this.isRunning(job)) return
+      if (this.stopped || !this.isRunning(job)) return
       if ('progress' in message) {
         if (Date.now() - lastProgress < PROGRESS_MS) return
         lastProgress = Date.now()
@@ -108,7 +108,7 @@ export class Jobs {
     worker.on('error', error => this.fail(job, error))
     worker.on('exit', () => {
       this.running.delete(job.id)
-      if (this.isRunning(job) && !this.stopped) this.end(job, 'failed', 'The work ended without a result. Please start it again.')
+      if (!this.stopped && this.isRunning(job)) this.end(job, 'failed', 'The work ended without a result. Please start it again.')
       this.next()
     })
   }

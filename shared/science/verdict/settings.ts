@@ -6,6 +6,8 @@ export interface ComparedSample {
   name: string
   kind: 'sample' | 'solventBlank' | 'processBlank' | 'pooledQc' | 'standard'
   side: 'A' | 'B' | null
+  /** The side was chosen by hand, whatever the sample sheet says. */
+  sideByHand?: true
   preparation: string
   amount: number | null
   amountUnit: 'mg' | 'mL' | null

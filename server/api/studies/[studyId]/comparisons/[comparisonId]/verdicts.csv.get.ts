@@ -1,0 +1,11 @@
+import { Readable } from 'node:stream'
+import { versionQuerySchema } from '../../../../../../shared/schemas/comparison'
+import { verdictCsv } from '../../../../../domain/comparison/verdictCsv'
+
+export default defineRoute(async (event) => {
+  const { db, person, study } = await requireStudy(event)
+  const { version } = readQueryInput(event, versionQuerySchema)
+  const { fileName, chunks } = verdictCsv(db, study, readParam(event, 'comparisonId'), person, version)
+  setResponseHeaders(event, { 'content-type': 'text/csv; charset=utf-8', 'content-disposition': `attachment; filename="${fileName}"` })
+  return sendStream(event, Readable.from(chunks))
+})

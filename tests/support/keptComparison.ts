@@ -1,0 +1,19 @@
+import { gzipSync } from 'node:zlib'
+import type { OpenDatabase } from '../../server/db/open'
+import { alignmentData } from '../../server/domain/comparison/alignmentData'
+import { keepVersion } from '../../server/domain/comparison/keepVersion'
+import { snapshotSamples } from '../../server/domain/comparison/snapshotSamples'
+import { storeSample } from '../../server/domain/comparison/storedSample'
+import { packVerdicts } from '../../shared/formats/verdictColumns'
+import { decideVerdicts } from '../../shared/science/verdict/decideVerdicts'
+import { comparisonDefaults, type ComparisonSettings } from '../../shared/science/verdict/settings'
+import { summariseSides } from '../../shared/science/verdict/summariseSides'
+
+/** A comparison with one version, judged and kept without a job; of an alignment made by addComparedAlignment. Gives its id. */
+export function addKeptComparison({ db }: Pick<OpenDatabase, 'db'>, studyId: string, createdBy: string, alignmentId: string, { practice = false, title = 'Millrace against Tallow Lane', settings = {} as Partial<ComparisonSettings>, comparisonId = null as string | null } = {}) {
+  const all = { ...comparisonDefaults, ...settings }
+  const samples = snapshotSamples(db, alignmentId).map(sample => ({ ...sample, floor: Number.isNaN(sample.floor) ? 10 : sample.floor }))
+  const result = decideVerdicts(summariseSides({ ...alignmentData(db, alignmentId), samples, normaliseByAmount: all.normaliseByAmount }), all)
+  return keepVersion(db, studyId, { comparisonId, title, practice, alignmentId, sideAName: 'Millrace', sideBName: 'Tallow Lane', settings: all, samples: samples.map(storeSample) },
+    { samples, counts: result.counts, cautions: result.cautions, columns: gzipSync(packVerdicts(result)) }, createdBy)
+}
