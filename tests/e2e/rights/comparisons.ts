@@ -1,3 +1,4 @@
+import { comparisonDefaults } from '../../../shared/science/verdict/settings'
 import { addComparedAlignment } from '../../support/comparedAlignment'
 import { addKeptComparison } from '../../support/keptComparison'
 import type { RightsFile, RightsRow } from '../../support/rights'
@@ -5,6 +6,7 @@ import type { RightsFile, RightsRow } from '../../support/rights'
 const base = '/api/studies/[studyId]/comparisons'
 const one = `${base}/[comparisonId]`
 const columns = (letter: string) => [{ name: `${letter}1`, side: 'A' as const, intensity: [1000, 900] }, { name: `${letter}2`, side: 'B' as const, intensity: [1000, 4000] }]
+const newVersion: RightsRow['body'] = () => ({ from: 1, settings: { ...comparisonDefaults, foldLimit: 0.5 } })
 const official = { from: { comparisonId: 'comparedId' } }
 /** A practice copy is there for the student who made it, and for nobody else. */
 const practice: Pick<RightsRow, 'from' | 'except'> = {
@@ -16,6 +18,7 @@ const file: RightsFile = {
   prepare: (fixture, laboratory) => {
     const { studyId = '', analystId = '', studentId = '' } = fixture
     const { alignment } = addComparedAlignment(laboratory, studyId, analystId, columns('official'))
+    fixture.comparedAlignmentId = alignment.id
     fixture.comparedId = addKeptComparison(laboratory, studyId, analystId, alignment.id)
     addKeptComparison(laboratory, studyId, analystId, alignment.id, { comparisonId: fixture.comparedId, settings: { reachLimit: 4 } })
     const own = addComparedAlignment(laboratory, studyId, studentId, columns('practice'), { practice: true })
@@ -24,7 +27,8 @@ const file: RightsFile = {
   },
   rows: [
     { route: `GET ${base}`, needs: 'readStudy' },
-    { route: `POST ${base}`, needs: 'practise', ok: 400 },
+    { route: `POST ${base}`, needs: 'compare', ok: 202, body: ({ comparedAlignmentId }) => ({ alignmentId: comparedAlignmentId }) },
+    { route: `POST ${base}`, needs: 'practise', ok: 202, body: ({ comparedAlignmentId }) => ({ alignmentId: comparedAlignmentId, practice: true }) },
     { route: `GET ${one}`, needs: 'readStudy', ...official },
     { route: `GET ${one}`, needs: 'readStudy', ...practice },
     { route: `GET ${one}/data`, needs: 'readStudy', ...official },
@@ -35,8 +39,8 @@ const file: RightsFile = {
     { route: `GET ${one}/changes`, needs: 'readStudy', ...practice },
     { route: `GET ${one}/verdicts.csv`, needs: 'export', ...official },
     { route: `GET ${one}/verdicts.csv`, needs: 'export', ...practice },
-    { route: `POST ${one}/versions`, needs: 'practise', ok: 400, ...official },
-    { route: `POST ${one}/versions`, needs: 'practise', ok: 400, ...practice, except: { reviewer: 403 } },
+    { route: `POST ${one}/versions`, needs: 'compare', ok: 202, body: newVersion, ...official },
+    { route: `POST ${one}/versions`, needs: 'practise', body: newVersion, ...practice, except: { ...practice.except, reviewer: 403, student: 202 } },
   ],
 }
 export default file
