@@ -8,10 +8,13 @@ const root = (path: string) => fileURLToPath(new URL(path, import.meta.url))
 /** Megabytes a feature table may have; the same limit is named in shared/schemas/table. */
 const TABLE_BYTES = 64 * 2 ** 20
 
-/** Every file in server/workers is bundled to text, so that built output needs no path to it (see DEVELOPERS.md). */
+/**
+ * Every file in server/workers is bundled to text, so that built output needs no path to it (see DEVELOPERS.md).
+ * Base64, because the build replaces words such as `typeof window` inside plain text too, and breaks it.
+ */
 function workerSources() {
   const names = readdirSync(root('./server/workers')).filter(name => name.endsWith('.ts'))
-  return Object.fromEntries(names.map(name => [name.replace('.ts', ''), bundleWorker(root(`./server/workers/${name}`))]))
+  return names.map(name => [name.replace('.ts', ''), Buffer.from(bundleWorker(root(`./server/workers/${name}`))).toString('base64')])
 }
 
 export default defineNuxtConfig({
@@ -69,7 +72,7 @@ export default defineNuxtConfig({
   nitro: {
     compressPublicAssets: true,
     virtual: {
-      '#workers': () => `export default ${JSON.stringify(workerSources())}`,
+      '#workers': () => `export default Object.fromEntries(${JSON.stringify(workerSources())}.map(([name, text]) => [name, Buffer.from(text, 'base64').toString('utf8')]))`,
       '#migrations': () => `export default ${JSON.stringify(readMigrationFiles({ migrationsFolder: root('./drizzle') }))}`,
     },
   },
