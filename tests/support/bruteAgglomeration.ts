@@ -13,6 +13,7 @@ interface PlainCluster {
   sumMz: number
   sumMinutes: number
   stamp: number
+  refusals: number
 }
 
 /**
@@ -20,7 +21,7 @@ interface PlainCluster {
  *
  * @returns groups as lists of features, each ascending
  */
-export function bruteAgglomeration(features: readonly PlainFeature[], settings: AlignmentSettings): number[][] {
+export function bruteAgglomeration(features: readonly PlainFeature[], settings: AlignmentSettings, mostRefusals: number): number[][] {
   const tolerance = (mz: number) => massToleranceDa(mz, settings.alignMassPpm, settings.massFloorDa)
   const at = (index: number) => features[index] as PlainFeature
   const lesser = features.map((own, i) => features.some((other, j) => j !== i && other.table === own.table
@@ -28,7 +29,7 @@ export function bruteAgglomeration(features: readonly PlainFeature[], settings: 
     && Math.abs(other.mz - own.mz) <= tolerance(0.5 * (other.mz + own.mz))
     && (other.intensity > own.intensity || (other.intensity === own.intensity && j < i))))
   let stamps = 0
-  const single = (index: number): PlainCluster => ({ members: [index], sumMz: at(index).mz, sumMinutes: at(index).minutes, stamp: stamps++ })
+  const single = (index: number): PlainCluster => ({ members: [index], sumMz: at(index).mz, sumMinutes: at(index).minutes, stamp: stamps++, refusals: 0 })
   const refused = new Set<string>()
   let clusters: PlainCluster[] = []
 
@@ -39,6 +40,7 @@ export function bruteAgglomeration(features: readonly PlainFeature[], settings: 
     return byMass > 1 || byTime > 1 ? Number.POSITIVE_INFINITY : byMass * byMass + byTime * byTime
   }
   const allowed = (a: PlainCluster, b: PlainCluster): boolean => {
+    if (Math.max(a.refusals, b.refusals) >= mostRefusals) return false
     if (refused.has(`${a.stamp} ${b.stamp}`)) return false
     const members = [...a.members, ...b.members]
     if (new Set(members.map(index => at(index).table)).size < members.length) return false
@@ -71,11 +73,13 @@ export function bruteAgglomeration(features: readonly PlainFeature[], settings: 
     if (!best) return false
     const { a, b } = best
     if (crosses(a, b)) {
+      a.refusals++
+      b.refusals++
       refused.add(`${a.stamp} ${b.stamp}`)
       refused.add(`${b.stamp} ${a.stamp}`)
       return true
     }
-    const merged = { members: [...a.members, ...b.members].sort((x, y) => x - y), sumMz: a.sumMz + b.sumMz, sumMinutes: a.sumMinutes + b.sumMinutes, stamp: stamps++ }
+    const merged = { members: [...a.members, ...b.members].sort((x, y) => x - y), sumMz: a.sumMz + b.sumMz, sumMinutes: a.sumMinutes + b.sumMinutes, stamp: stamps++, refusals: 0 }
     clusters = [...clusters.filter(cluster => cluster !== a && cluster !== b), merged]
     return true
   }

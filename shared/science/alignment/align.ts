@@ -1,6 +1,7 @@
-import { settlePieces, sortPieces } from './correspondence'
+import { certainGroups, settlePieces, sortPieces, type Groups } from './correspondence'
 import { correctMinutes } from './drift'
 import { firstCorrections, pickReference, type Correction } from './firstCorrection'
+import { consensusGroups, enoughConsensusGroups } from './refine'
 import { writeResult } from './result'
 import { secondCorrections } from './secondCorrection'
 import type { AlignmentSettings } from './settings'
@@ -36,8 +37,14 @@ function refineTimes(
 ): { minutes: Float64Array, corrections: Correction[] } {
   const minutes = correctedMinutes(stack, first)
   if (!settings.correctDrift || tables.length < 2) return { minutes, corrections: first }
-  const found = settlePieces(stack, minutes, sortPieces(stack, minutes, settings), settings, onShare)
-  const corrections = secondCorrections(first, stack, found, minutes, settings)
+  const pieces = sortPieces(stack, minutes, settings)
+  let found: Groups = certainGroups(pieces)
+  let chosen = consensusGroups(found, minutes, tables.length)
+  if (chosen.length < enoughConsensusGroups) {
+    found = settlePieces(stack, minutes, pieces, settings, onShare)
+    chosen = consensusGroups(found, minutes, tables.length)
+  }
+  const corrections = secondCorrections(first, stack, found, chosen, minutes, settings)
   return { minutes: correctedMinutes(stack, corrections), corrections }
 }
 

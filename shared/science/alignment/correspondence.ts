@@ -4,16 +4,20 @@ import { Clusters } from './clusters'
 import { ElutionOrder } from './elutionOrder'
 import { MergeQueue } from './mergeQueue'
 import { NeighbourNotes } from './neighbours'
+import { Partners } from './partners'
 import type { AlignmentSettings } from './settings'
-import { settlePiece, type Bench } from './settlePiece'
+import { mostRefusals, settlePiece, type Bench } from './settlePiece'
 import { splitOnGaps, type Pieces } from './splitOnGaps'
 import type { FeatureStack } from './stack'
 
 /** Groups in the order they were found: the features of group g are items[starts[g] … starts[g + 1]], in canonical order. */
-export interface Correspondence {
+export interface Groups {
   items: Int32Array
   starts: Int32Array
   groups: number
+}
+
+export interface Correspondence extends Groups {
   crowdedPieces: number
   notes: NeighbourNotes
 }
@@ -70,12 +74,29 @@ function isGroup(
     && mz[items[to - 1]!]! - centreMz <= tolerance && centreMz - mz[items[from]!]! <= tolerance
 }
 
+/** The groups that splitting alone made: the surest. Pieces of one feature and crowded ones are left out. */
+export function certainGroups({ items, starts, crowded }: SortedPieces): Groups {
+  const kept = new Int32Array(items.length)
+  const keptStarts = new Int32Array(starts.length)
+  let groups = 0
+  let at = 0
+  for (let piece = 0; piece + 1 < starts.length; piece++) {
+    const from = starts[piece]!
+    const to = starts[piece + 1]!
+    if (crowded[piece] === 1 || to - from < 2) continue
+    keptStarts[groups++] = at
+    for (let i = from; i < to; i++) kept[at++] = items[i]!
+  }
+  keptStarts[groups] = at
+  return { items: kept.slice(0, at), starts: keptStarts.slice(0, groups + 1), groups }
+}
+
 /** METHODS 5, step 2: settles the crowded pieces and lists all groups. */
 export function settlePieces(
   stack: FeatureStack, minutes: Float64Array, pieces: SortedPieces, settings: AlignmentSettings, onShare: (share: number) => void,
 ): Correspondence {
   const tables = stack.inputPosition.length
-  const bench: Bench = { clusters: new Clusters(settings, tables), queue: new MergeQueue(), elution: new ElutionOrder(tables) }
+  const bench: Bench = { clusters: new Clusters(settings, tables), queue: new MergeQueue(), partners: new Partners(), elution: new ElutionOrder(tables), mostRefusals }
   const items = pieces.items.slice()
   const starts = new Int32Array(stack.size + 1)
   const notes = new NeighbourNotes()
@@ -89,7 +110,7 @@ export function settlePieces(
       continue
     }
     bench.clusters.load(stack.mz, minutes, stack.table, pieces.items, from, to)
-    settlePiece(bench, intensities(stack, pieces.items, from, to))
+    settlePiece(bench, intensities(stack, bench.clusters, pieces.items, from))
     const firstGroup = groups
     groups = writeGroups(bench.clusters, pieces.items, from, items, starts, groups)
     if (groups - firstGroup > 1) notes.add(bench.clusters, pieces.items, from, firstGroup)
@@ -98,13 +119,13 @@ export function settlePieces(
   return { items, starts: starts.slice(0, groups + 1), groups, crowdedPieces: pieces.crowdedPieces, notes }
 }
 
-function intensities(stack: FeatureStack, items: Int32Array, from: number, to: number): Float64Array {
-  const values = new Float64Array(to - from)
-  for (let i = from; i < to; i++) values[i - from] = stack.intensity[items[i]!]!
+function intensities(stack: FeatureStack, { size, rank }: Clusters, items: Int32Array, from: number): Float64Array {
+  const values = new Float64Array(size)
+  for (let feature = 0; feature < size; feature++) values[feature] = stack.intensity[items[from + rank[feature]!]!]!
   return values
 }
 
-/** Writes the clusters of a settled piece, in order of their first features, over the piece's place in `items`. */
+/** Writes the clusters of a settled piece, in order along its list, over the piece's place in `items`. */
 function writeGroups(clusters: Clusters, pieceItems: Int32Array, from: number, items: Int32Array, starts: Int32Array, firstGroup: number): number {
   let groups = firstGroup
   let at = from
@@ -112,7 +133,7 @@ function writeGroups(clusters: Clusters, pieceItems: Int32Array, from: number, i
     if (clusters.alive[cluster] === 0) continue
     const start = at
     starts[groups++] = start
-    for (let member = cluster; member >= 0; member = clusters.nextMember[member]!) items[at++] = pieceItems[from + member]!
+    for (let member = cluster; member >= 0; member = clusters.nextMember[member]!) items[at++] = pieceItems[from + clusters.rank[member]!]!
     items.subarray(start, at).sort()
   }
   return groups

@@ -1,5 +1,5 @@
-import { ascendingOrder } from '../numeric/ascendingOrder'
 import { massFloorDa } from '../mass/tolerance'
+import { select } from '../numeric/select'
 import type { AlignmentSettings } from './settings'
 import type { FeatureTable } from './types'
 
@@ -24,19 +24,27 @@ export interface Landmarks {
 
 /** The `landmarkFeatures` most intense features of a table; ties by lower m/z, then earlier time. */
 export function brightFeatures(table: FeatureTable): BrightFeatures {
-  const { mz, retentionMinutes, intensity } = table
-  const byMass = ascendingOrder(mz, ascendingOrder(retentionMinutes))
-  let chosen = byMass
-  if (byMass.length > landmarkFeatures) {
-    const brightness = ascendingOrder(intensity.map(value => -value), byMass)
-    const bright = new Uint8Array(mz.length)
-    for (const row of brightness.subarray(0, landmarkFeatures)) bright[row] = 1
-    chosen = byMass.filter(row => bright[row] === 1)
-  }
+  const { mz, retentionMinutes } = table
+  const rows = brightRows(table)
+  const byMass = rows.sort((a, b) => mz[a]! - mz[b]! || retentionMinutes[a]! - retentionMinutes[b]! || a - b)
   return {
-    mz: Float64Array.from(chosen, row => mz[row]!),
-    minutes: Float64Array.from(chosen, row => retentionMinutes[row]!),
+    mz: Float64Array.from(byMass, row => mz[row]!),
+    minutes: Float64Array.from(byMass, row => retentionMinutes[row]!),
   }
+}
+
+function brightRows({ mz, retentionMinutes, intensity }: FeatureTable): number[] {
+  const count = intensity.length
+  if (count <= landmarkFeatures) return Array.from(intensity.keys())
+  const least = select(intensity.slice(), count - landmarkFeatures)
+  const above: number[] = []
+  const level: number[] = []
+  intensity.forEach((value, row) => {
+    if (value > least) above.push(row)
+    else if (value === least) level.push(row)
+  })
+  level.sort((a, b) => mz[a]! - mz[b]! || retentionMinutes[a]! - retentionMinutes[b]! || a - b)
+  return [...above, ...level.slice(0, landmarkFeatures - above.length)]
 }
 
 /** Pairs within twice the mass tolerance and the wide time window, each the only such match of the other. */

@@ -6,18 +6,21 @@ export class MergeQueue {
   length = 0
   partner = new Int32Array(0)
   distance = new Float64Array(0)
-  /** The partner's stamp when it was found: another now means that it has changed since. */
-  partnerStamp = new Int32Array(0)
+  private rank = new Int32Array(0)
   private heap = new Int32Array(0)
   private slot = new Int32Array(0)
 
-  /** Empties the queue for clusters 0 … size − 1. */
-  reset(size: number): void {
+  /**
+   * Empties the queue for clusters 0 … size − 1.
+   *
+   * @param rank place of each in canonical order
+   */
+  reset(size: number, rank: Int32Array): void {
+    this.rank = rank
     if (this.partner.length < size) {
       const capacity = Math.max(size, 2 * this.partner.length)
       this.partner = new Int32Array(capacity)
       this.distance = new Float64Array(capacity)
-      this.partnerStamp = new Int32Array(capacity)
       this.heap = new Int32Array(capacity)
       this.slot = new Int32Array(capacity)
     }
@@ -31,14 +34,13 @@ export class MergeQueue {
   }
 
   /** Enters, moves or (partner −1) removes a cluster. */
-  set(cluster: number, partner: number, distance: number, partnerStamp: number): void {
+  set(cluster: number, partner: number, distance: number): void {
     if (partner < 0) {
       this.remove(cluster)
       return
     }
     this.partner[cluster] = partner
     this.distance[cluster] = distance
-    this.partnerStamp[cluster] = partnerStamp
     if (this.slot[cluster]! < 0) {
       this.heap[this.length] = cluster
       this.slot[cluster] = this.length++
@@ -60,12 +62,14 @@ export class MergeQueue {
   private before(a: number, b: number): boolean {
     const difference = this.distance[a]! - this.distance[b]!
     if (difference !== 0) return difference < 0
-    const partnerA = this.partner[a]!
-    const partnerB = this.partner[b]!
-    const first = Math.min(a, partnerA) - Math.min(b, partnerB)
+    const ownA = this.rank[a]!
+    const ownB = this.rank[b]!
+    const partnerA = this.rank[this.partner[a]!]!
+    const partnerB = this.rank[this.partner[b]!]!
+    const first = Math.min(ownA, partnerA) - Math.min(ownB, partnerB)
     if (first !== 0) return first < 0
-    const second = Math.max(a, partnerA) - Math.max(b, partnerB)
-    return second !== 0 ? second < 0 : a < b
+    const second = Math.max(ownA, partnerA) - Math.max(ownB, partnerB)
+    return second !== 0 ? second < 0 : ownA < ownB
   }
 
   private settle(start: number): void {

@@ -1,3 +1,4 @@
+import { select } from '../numeric/select'
 import type { Clusters } from './clusters'
 
 /** Most neighbours kept of a group, the nearest: background ions would have hundreds. */
@@ -15,7 +16,7 @@ export class NeighbourNotes {
   readonly leftOutFeature: number[] = []
   readonly leftOutGroup: number[] = []
 
-  /** Reads a settled piece whose clusters became the groups from firstGroup on, in order of their first features. */
+  /** Reads a settled piece whose clusters became the groups from firstGroup on, in order of their numbers. */
   add(clusters: Clusters, pieceItems: Int32Array, from: number, firstGroup: number): void {
     const groupOf = new Int32Array(clusters.size)
     let group = firstGroup
@@ -27,22 +28,30 @@ export class NeighbourNotes {
       for (let member = c; member >= 0; member = clusters.nextMember[member]!) {
         const beside = besideWhich(clusters, c, member, reach)
         if (beside < 0) continue
-        this.leftOutFeature.push(pieceItems[from + member]!)
+        this.leftOutFeature.push(pieceItems[from + clusters.rank[member]!]!)
         this.leftOutGroup.push(groupOf[beside]!)
       }
     }
   }
 
   private addNeighbours(clusters: Clusters, cluster: number, reach: number[], groupOf: Int32Array): void {
-    const near = reach
-      .map(other => ({ other, distance: squaredDistance(clusters, clusters.mz[cluster]!, clusters.minutes[cluster]!, other, 1) }))
-      .filter(({ distance }) => distance < Number.POSITIVE_INFINITY)
-      .sort((a, b) => a.distance - b.distance || a.other - b.other)
-    for (const { other } of near.slice(0, mostNeighbours)) {
+    for (const other of nearestOf(clusters, cluster, reach)) {
       this.group.push(groupOf[cluster]!)
       this.neighbour.push(groupOf[other]!)
     }
   }
+}
+
+/** Those within one tolerance of a cluster's centre, nearest first, at most `mostNeighbours`. */
+function nearestOf(clusters: Clusters, cluster: number, reach: readonly number[]): number[] {
+  const mz = clusters.mz[cluster]!
+  const minutes = clusters.minutes[cluster]!
+  const distances = Float64Array.from(reach, other => squaredDistance(clusters, mz, minutes, other, 1))
+  const furthest = reach.length > mostNeighbours ? select(distances.slice(), mostNeighbours - 1) : Number.MAX_VALUE
+  const near: number[] = []
+  for (let i = 0; i < reach.length; i++) if (distances[i]! <= furthest && distances[i]! < Number.POSITIVE_INFINITY) near.push(i)
+  near.sort((a, b) => distances[a]! - distances[b]! || clusters.rank[reach[a]!]! - clusters.rank[reach[b]!]!)
+  return near.slice(0, mostNeighbours).map(i => reach[i]!)
 }
 
 /** Squared distance in tolerances from a point to a cluster's centre; Infinity where either direction exceeds `limit` tolerances. */
@@ -73,7 +82,7 @@ function besideWhich(clusters: Clusters, own: number, feature: number, reach: nu
   for (const other of reach) {
     if (clusters.count[other]! <= clusters.count[own]! || !clusters.holdsTable(other, clusters.table[feature]!)) continue
     const distance = squaredDistance(clusters, clusters.featureMz[feature]!, clusters.featureMinutes[feature]!, other, 1)
-    if (distance > best || (distance === best && other > beside) || distance === Number.POSITIVE_INFINITY) continue
+    if (distance > best || (distance === best && clusters.rank[other]! > clusters.rank[beside]!) || distance === Number.POSITIVE_INFINITY) continue
     if (memberDistance(clusters, other, clusters.table[feature]!) >= distance) continue
     best = distance
     beside = other

@@ -1,10 +1,12 @@
 import { ascendingOrder } from '../numeric/ascendingOrder'
 import { median } from '../numeric/median'
-import type { Correspondence } from './correspondence'
+import type { Groups } from './correspondence'
 import type { FeatureStack } from './stack'
 
 /** Most groups that a table is fitted to (METHODS 4). */
 export const mostConsensusGroups = 2000
+/** With this many that splitting alone made, crowded pieces need not be settled to refine the times. */
+export const enoughConsensusGroups = 1000
 
 /** Points that one table is fitted to: its features in widely shared groups. Ascending by minutes. */
 export interface ConsensusPoints {
@@ -15,7 +17,7 @@ export interface ConsensusPoints {
 }
 
 /** Groups present in more than half of the tables, at least two; at most 2,000, evenly over time. */
-export function consensusGroups({ items, starts, groups }: Correspondence, minutes: Float64Array, tables: number): Int32Array {
+export function consensusGroups({ items, starts, groups }: Groups, minutes: Float64Array, tables: number): Int32Array {
   const fewest = Math.max(2, Math.floor(tables / 2) + 1)
   const wide: number[] = []
   for (let g = 0; g < groups; g++) if (starts[g + 1]! - starts[g]! >= fewest) wide.push(g)
@@ -26,9 +28,9 @@ export function consensusGroups({ items, starts, groups }: Correspondence, minut
 
 /** Per canonical table number, the points it is fitted to. */
 export function consensusPoints(
-  stack: FeatureStack, correspondence: Correspondence, minutes: Float64Array, chosen: Int32Array,
+  stack: FeatureStack, found: Groups, minutes: Float64Array, chosen: Int32Array,
 ): ConsensusPoints[] {
-  const { items, starts } = correspondence
+  const { items, starts } = found
   const features: number[][] = Array.from(stack.inputPosition, () => [])
   const targets: number[][] = Array.from(stack.inputPosition, () => [])
   for (const g of chosen) {

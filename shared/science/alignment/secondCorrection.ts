@@ -1,7 +1,7 @@
-import type { Correspondence } from './correspondence'
+import type { Groups } from './correspondence'
 import { addDrift, fitDrift } from './drift'
 import type { Correction } from './firstCorrection'
-import { consensusGroups, consensusPoints } from './refine'
+import { consensusPoints } from './refine'
 import type { AlignmentSettings } from './settings'
 import type { FeatureStack } from './stack'
 
@@ -10,13 +10,13 @@ import type { FeatureStack } from './stack'
  * widely shared groups; who borrowed a curve takes over the new one. A table whose landmarks carried no curve stays as it is:
  * its features in shared groups lie within tolerance by themselves and would confirm anything.
  *
+ * @param chosen the widely shared groups
  * @returns new corrections; those given are not changed
  */
 export function secondCorrections(
-  corrections: readonly Correction[], stack: FeatureStack, correspondence: Correspondence, minutes: Float64Array, settings: AlignmentSettings,
+  corrections: readonly Correction[], stack: FeatureStack, found: Groups, chosen: Int32Array, minutes: Float64Array, settings: AlignmentSettings,
 ): Correction[] {
-  const chosen = consensusGroups(correspondence, minutes, corrections.length)
-  const points = consensusPoints(stack, correspondence, minutes, chosen)
+  const points = consensusPoints(stack, found, minutes, chosen)
   const refined = corrections.map(correction => ({ ...correction }))
   points.forEach((own, number) => {
     const correction = refined[stack.inputPosition[number]!]!

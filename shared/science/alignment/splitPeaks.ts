@@ -1,3 +1,4 @@
+import { ascendingOrder } from '../numeric/ascendingOrder'
 import type { Clusters } from './clusters'
 
 /**
@@ -8,7 +9,7 @@ import type { Clusters } from './clusters'
  * @returns 1 for each such feature
  */
 export function markSplitPeaks(clusters: Clusters, intensity: Float64Array): Uint8Array {
-  const { size, table, featureMz, featureMinutes, minutesTolerance } = clusters
+  const { size, rank, table, featureMz, featureMinutes, minutesTolerance } = clusters
   const lesser = new Uint8Array(size)
   const order = byTableAndTime(clusters)
   for (let i = 0; i < size; i++) {
@@ -19,7 +20,7 @@ export function markSplitPeaks(clusters: Clusters, intensity: Float64Array): Uin
         if (table[other] !== table[feature] || Math.abs(featureMinutes[other]! - featureMinutes[feature]!) > minutesTolerance) break
         const apart = Math.abs(featureMz[other]! - featureMz[feature]!)
         if (apart > clusters.massTolerance(0.5 * (featureMz[other]! + featureMz[feature]!))) continue
-        if (intensity[other]! > intensity[feature]! || (intensity[other] === intensity[feature] && other < feature)) {
+        if (intensity[other]! > intensity[feature]! || (intensity[other] === intensity[feature] && rank[other]! < rank[feature]!)) {
           lesser[feature] = 1
           break
         }
@@ -31,7 +32,5 @@ export function markSplitPeaks(clusters: Clusters, intensity: Float64Array): Uin
 }
 
 function byTableAndTime({ size, table, featureMinutes }: Clusters): Int32Array {
-  const order = new Int32Array(size)
-  for (let i = 0; i < size; i++) order[i] = i
-  return order.sort((a, b) => table[a]! - table[b]! || featureMinutes[a]! - featureMinutes[b]! || a - b)
+  return ascendingOrder(Float64Array.from(table.subarray(0, size)), ascendingOrder(featureMinutes.slice(0, size)))
 }

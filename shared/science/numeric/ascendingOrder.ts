@@ -1,18 +1,23 @@
 const digitBits = 11
-const digits = 6
 const buckets = 1 << digitBits
-const smallLength = 400
+const smallLength = 200
+const steps = 2 ** 32 - 1
+/** Moves a key, on average, beyond which insertion gives way to a full sort. */
+const mostMoves = 64
 
 /**
- * The indices that put numbers in ascending order: a stable radix sort of their 64 bits, about as fast as sorting
- * the numbers themselves. Equal numbers keep the order of `start`.
+ * The indices that put numbers in ascending order, about as fast as sorting the numbers themselves: a stable radix sort of
+ * where each stands between least and greatest, in 2³² steps, then of the few that share a step by their full value.
+ * Equal numbers keep the order of `start`.
  *
  * @param keys finite numbers; not changed
  * @param start an order to begin from (default 0, 1, 2 …), so that several keys can be sorted one after the other; not changed
  */
 export function ascendingOrder(keys: Float64Array, start?: Int32Array): Int32Array {
   const order = start ? start.slice() : naturalOrder(keys.length)
-  return order.length < smallLength ? smallOrder(keys, order) : radixOrder(keys, order)
+  if (order.length >= smallLength) radixOrder(keys, order)
+  settleRuns(keys, order)
+  return order
 }
 
 function naturalOrder(length: number): Int32Array {
@@ -21,66 +26,80 @@ function naturalOrder(length: number): Int32Array {
   return order
 }
 
-function smallOrder(keys: Float64Array, order: Int32Array): Int32Array {
-  const place = Array.from(order, (index, position) => ({ index, position, key: keys[index]! }))
-  place.sort((a, b) => a.key - b.key || a.position - b.position)
-  return Int32Array.from(place, entry => entry.index)
-}
-
-function radixOrder(keys: Float64Array, order: Int32Array): Int32Array {
+/** Sorts the order by the step of each key, keeping it within a step. */
+function radixOrder(keys: Float64Array, order: Int32Array): void {
   const length = order.length
-  const words = sortableWords(keys)
-  let from: Int32Array = order
-  let to: Int32Array = new Int32Array(length)
-  const counts = new Int32Array(buckets)
-  for (let digit = 0; digit < digits; digit++) {
+  let least = Number.POSITIVE_INFINITY
+  let greatest = Number.NEGATIVE_INFINITY
+  for (let i = 0; i < length; i++) {
+    const key = keys[order[i]!]!
+    if (key < least) least = key
+    if (key > greatest) greatest = key
+  }
+  const scale = steps / (greatest - least)
+  // No range, or one too wide or narrow for steps: left to settleRuns.
+  if (!(scale > 0 && scale < Number.POSITIVE_INFINITY)) return
+  let from = new Uint32Array(2 * length)
+  let to = new Uint32Array(2 * length)
+  const counts = new Int32Array(3 * buckets)
+  for (let i = 0; i < length; i++) {
+    const index = order[i]!
+    const step = Math.min(steps, (keys[index]! - least) * scale) >>> 0
+    from[2 * i] = step
+    from[2 * i + 1] = index
+    counts[step & (buckets - 1)]!++
+    counts[buckets + (step >>> digitBits & (buckets - 1))]!++
+    counts[2 * buckets + (step >>> 2 * digitBits)]!++
+  }
+  for (let digit = 0; digit < 3; digit++) {
     const shift = digit * digitBits
-    // A digit may straddle the two words of a number: take its low part from one and the rest from the other.
-    const word = shift >> 5
-    const offset = shift & 31
-    const spill = offset + digitBits > 32 && word === 0 ? 32 - offset : 0
-    counts.fill(0)
-    for (let i = 0; i < length; i++) {
-      const at = from[i]! * 2
-      counts[readDigit(words, at, word, offset, spill)]!++
-    }
-    if (counts.includes(length)) continue
+    const offset = digit * buckets
     let sum = 0
-    for (let b = 0; b < buckets; b++) {
+    for (let b = offset; b < offset + buckets; b++) {
       const count = counts[b]!
       counts[b] = sum
       sum += count
     }
-    for (let i = 0; i < length; i++) {
-      const index = from[i]!
-      const bucket = readDigit(words, index * 2, word, offset, spill)
-      to[counts[bucket]!++] = index
+    for (let i = 0; i < 2 * length; i += 2) {
+      const step = from[i]!
+      const at = 2 * counts[offset + (step >>> shift & (buckets - 1))]!++
+      to[at] = step
+      to[at + 1] = from[i + 1]!
     }
     const swap = from
     from = to
     to = swap
   }
-  return from
+  for (let i = 0; i < length; i++) order[i] = from[2 * i + 1]!
 }
 
-function readDigit(words: Uint32Array, at: number, word: number, offset: number, spill: number): number {
-  const low = words[at + word]! >>> offset
-  return (spill > 0 ? low | (words[at + 1]! << spill) : low) & (buckets - 1)
-}
-
-/** Low and high word of each number, flipped so that unsigned order is numeric order. */
-function sortableWords(keys: Float64Array): Uint32Array {
-  const words = new Uint32Array(new Float64Array(keys).buffer)
-  for (let i = 0; i < words.length; i += 2) {
-    const low = words[i]!
-    const high = words[i + 1]!
-    const negative = high >>> 31 === 1
-    // −0 and 0 are the same number and must stay in their given order.
-    if (negative && low === 0 && high === 0x80000000) words[i + 1] = 0x80000000
-    else {
-      words[i] = negative ? ~low : low
-      words[i + 1] = negative ? ~high : high | 0x80000000
+/** Puts the nearly ordered right by insertion, which keeps equal keys in place; where it is far from ordered, by a full sort. */
+function settleRuns(keys: Float64Array, order: Int32Array): void {
+  const length = order.length
+  let moves = 0
+  let previous = Number.NEGATIVE_INFINITY
+  for (let i = 0; i < length; i++) {
+    const index = order[i]!
+    const key = keys[index]!
+    if (key >= previous) {
+      previous = key
+      continue
+    }
+    let j = i - 1
+    for (; j >= 0 && keys[order[j]!]! > key; j--) order[j + 1] = order[j]!
+    order[j + 1] = index
+    moves += i - j
+    if (moves > mostMoves * (length + smallLength)) {
+      stableSort(keys, order)
+      return
     }
   }
-  return words
+}
+
+function stableSort(keys: Float64Array, order: Int32Array): void {
+  const sorted = Array.from(order, (index, position) => ({ index, position, key: keys[index]! }))
+  sorted.sort((a, b) => a.key - b.key || a.position - b.position)
+  sorted.forEach((entry, i) => {
+    order[i] = entry.index
+  })
 }

@@ -1,5 +1,5 @@
 import { interpolate } from './interpolate'
-import { median } from './median'
+import { medianInPlace } from './median'
 
 export interface LowessCurve {
   /** Ascending distinct x at which the curve was fitted. */
@@ -51,11 +51,10 @@ function fitKnots(x: Float64Array, y: Float64Array, knots: Float64Array, window:
   const keptX: number[] = []
   const keptY: number[] = []
   const minimumSpread = 0.001 * (x[count - 1]! - x[0]!)
-  const weights = new Float64Array(count)
   let left = 0
   for (const at of knots) {
     while (left + window < count && at - x[left]! > x[left + window]! - at) left++
-    const value = localLine(x, y, robustness, weights, at, left, left + window - 1, minimumSpread)
+    const value = localLine(x, y, robustness, at, left, left + window - 1, minimumSpread)
     // Where robustness left no point with weight, the neighbouring knots speak.
     if (Number.isNaN(value)) continue
     keptX.push(at)
@@ -66,53 +65,50 @@ function fitKnots(x: Float64Array, y: Float64Array, knots: Float64Array, window:
   return { knotX, knotY, fit: x.map(value => interpolate(knotX, knotY, value)) }
 }
 
+/** Weighted straight line through the window, read at `at`; its sums run over distances from there. */
 function localLine(
-  x: Float64Array, y: Float64Array, robustness: Float64Array, weights: Float64Array,
-  at: number, left: number, right: number, minimumSpread: number,
+  x: Float64Array, y: Float64Array, robustness: Float64Array, at: number, left: number, right: number, minimumSpread: number,
 ): number {
   const reach = Math.max(at - x[left]!, x[right]! - at)
   const far = 0.999 * reach
   const near = 0.001 * reach
-  let end = left
-  let weightSum = 0
-  let weightedX = 0
-  for (; end < x.length; end++) {
-    const distance = Math.abs(x[end]! - at)
-    if (distance <= far) {
-      let weight = robustness[end]!
-      if (distance > near) {
-        const share = distance / reach
-        const tricube = 1 - share * share * share
-        weight *= tricube * tricube * tricube
-      }
-      weights[end] = weight
-      weightSum += weight
-      weightedX += weight * x[end]!
+  let sum = 0
+  let sumX = 0
+  let sumXX = 0
+  let sumY = 0
+  let sumXY = 0
+  for (let j = left; j < x.length; j++) {
+    const offset = x[j]! - at
+    const distance = Math.abs(offset)
+    if (distance > far) {
+      if (offset > 0) break
+      continue
     }
-    else if (x[end]! > at) break
-    else weights[end] = 0
+    let weight = robustness[j]!
+    if (distance > near) {
+      const share = distance / reach
+      const tricube = 1 - share * share * share
+      weight *= tricube * tricube * tricube
+    }
+    const weightedX = weight * offset
+    sum += weight
+    sumX += weightedX
+    sumXX += weightedX * offset
+    sumY += weight * y[j]!
+    sumXY += weightedX * y[j]!
   }
-  if (weightSum <= 0) return Number.NaN
-  const centre = weightedX / weightSum
-  let spread = 0
-  let meanY = 0
-  let covariance = 0
-  for (let j = left; j < end; j++) {
-    const offset = x[j]! - centre
-    const weight = weights[j]!
-    spread += weight * offset * offset
-    meanY += weight * y[j]!
-    covariance += weight * offset * y[j]!
-  }
-  meanY /= weightSum
-  return Math.sqrt(spread / weightSum) > minimumSpread ? meanY + (at - centre) * covariance / spread : meanY
+  if (sum <= 0) return Number.NaN
+  const centre = sumX / sum
+  const mean = sumY / sum
+  const variance = sumXX / sum - centre * centre
+  return variance > minimumSpread * minimumSpread ? mean - centre * (sumXY / sum - centre * mean) / variance : mean
 }
 
 /** Bisquare weights from the residuals; false where they are too small to tell points apart. */
 function reweigh(y: Float64Array, fit: Float64Array, robustness: Float64Array): boolean {
   const residuals = y.map((value, i) => Math.abs(value - fit[i]!))
   const mean = residuals.reduce((sum, value) => sum + value, 0) / residuals.length
-  const limit = 6 * median(residuals)
+  const limit = 6 * medianInPlace(residuals.slice())
   if (limit < 1e-7 * mean || limit === 0) return false
   for (let i = 0; i < residuals.length; i++) {
     const share = residuals[i]! / limit

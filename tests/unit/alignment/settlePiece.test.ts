@@ -3,26 +3,28 @@ import { describe, expect, it } from 'vitest'
 import { Clusters } from '../../../shared/science/alignment/clusters'
 import { ElutionOrder } from '../../../shared/science/alignment/elutionOrder'
 import { MergeQueue } from '../../../shared/science/alignment/mergeQueue'
+import { Partners } from '../../../shared/science/alignment/partners'
 import { alignmentDefaults } from '../../../shared/science/alignment/settings'
-import { settlePiece } from '../../../shared/science/alignment/settlePiece'
+import { mostRefusals, settlePiece } from '../../../shared/science/alignment/settlePiece'
 import { bruteAgglomeration, type PlainFeature } from '../../support/bruteAgglomeration'
 
 const tables = 40
 
-function settle(features: readonly PlainFeature[]): number[][] {
+function settle(features: readonly PlainFeature[], most = mostRefusals): number[][] {
   const clusters = new Clusters(alignmentDefaults, tables)
   const column = (read: (feature: PlainFeature) => number) => Float64Array.from(features, read)
   const items = Int32Array.from(features.keys())
   clusters.load(column(f => f.mz), column(f => f.minutes), Int32Array.from(features, f => f.table), items, 0, features.length)
-  settlePiece({ clusters, queue: new MergeQueue(), elution: new ElutionOrder(tables) }, column(f => f.intensity))
+  const intensity = Float64Array.from(clusters.rank.subarray(0, features.length), rank => features[rank]?.intensity ?? Number.NaN)
+  settlePiece({ clusters, queue: new MergeQueue(), partners: new Partners(), elution: new ElutionOrder(tables), mostRefusals: most }, intensity)
   const groups: number[][] = []
   for (let c = 0; c < features.length; c++) {
     if (clusters.alive[c] === 0) continue
     const members: number[] = []
-    for (let member = c; member >= 0; member = clusters.nextMember[member] ?? -1) members.push(member)
+    for (let member = c; member >= 0; member = clusters.nextMember[member] ?? -1) members.push(clusters.rank[member] ?? -1)
     groups.push(members.sort((a, b) => a - b))
   }
-  return groups
+  return groups.sort((a, b) => (a[0] ?? 0) - (b[0] ?? 0))
 }
 
 const canonical = (features: PlainFeature[]) =>
@@ -39,7 +41,8 @@ const crowd = (massSteps: number, timeSteps: number, tableCount: number) => fc.a
 describe('settlePiece', () => {
   it.each([[8, 30, 4], [2, 60, 6], [60, 6, 5], [20, 12, 10], [0, 40, 3]])('does what trying every pair does (%i m/z steps, %i time steps, %i tables)', (massSteps, timeSteps, tableCount) => {
     fc.assert(fc.property(crowd(massSteps, timeSteps, tableCount), (features) => {
-      expect(settle(features)).toEqual(bruteAgglomeration(features, alignmentDefaults))
+      expect(settle(features)).toEqual(bruteAgglomeration(features, alignmentDefaults, mostRefusals))
+      expect(settle(features, 1)).toEqual(bruteAgglomeration(features, alignmentDefaults, 1))
     }), { numRuns: 300, seed: 7 })
   })
 
