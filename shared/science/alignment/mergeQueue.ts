@@ -6,7 +6,7 @@ export class MergeQueue {
   length = 0
   partner = new Int32Array(0)
   distance = new Float64Array(0)
-  private rank = new Int32Array(0)
+  private rank: Int32Array = new Int32Array(0)
   private heap = new Int32Array(0)
   private slot = new Int32Array(0)
 
