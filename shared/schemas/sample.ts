@@ -34,3 +34,6 @@ export const sampleSchema = z.object({
 })
 export type SampleInput = z.infer<typeof sampleSchema>
 export type SampleField = keyof SampleInput
+
+/** The columns of the sample sheet, in their order. */
+export const sampleFields = ['name', 'kind', 'side', 'preparation', 'amount', 'amountUnit', 'volumeMl', 'dilution', 'injectionUl', 'runOrder', 'batch'] as const satisfies readonly SampleField[]

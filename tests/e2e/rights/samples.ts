@@ -3,6 +3,7 @@ import type { RightsFile } from '../../support/rights'
 const file: RightsFile = {
   rows: [
     { route: 'GET /api/studies/[studyId]/samples', needs: 'readStudy' },
+    { route: 'PATCH /api/studies/[studyId]/samples', needs: 'editStudy', body: () => ({ added: [] }) },
   ],
 }
 export default file
