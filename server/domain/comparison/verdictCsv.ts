@@ -16,7 +16,7 @@ import { readComparison } from './readComparison'
 import { versionColumns } from './readVersion'
 import { unzip } from './unzip'
 
-const ROWS_AT_ONCE = 500
+const ROWS_AT_ONCE = 200
 
 export interface VerdictCsv { fileName: string, chunks: AsyncGenerator<string> }
 

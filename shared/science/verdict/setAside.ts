@@ -5,8 +5,11 @@ import type { SideSummary } from './sideSummary'
 
 const NOT_SET_ASIDE = -1
 
-/** Makes the first rule of METHODS 9: the reason code for which a feature is set aside, or -1. */
-export function setAsideRule(summary: SideSummary, settings: ComparisonSettings): (feature: number) => number {
+/** The reason code for which a feature is set aside, or -1. */
+export type SetAsideRule = (feature: number) => number
+
+/** Makes the first rule of METHODS 9: sent to waste, below the intensity limit, blank-borne, by hand. */
+export function setAsideRule(summary: SideSummary, settings: ComparisonSettings): SetAsideRule {
   const byHand = new Set(settings.setAsideByHand.map(({ index }) => index))
   const { divertWindows, intensityLimit, blankRatio } = settings
   return (i) => {

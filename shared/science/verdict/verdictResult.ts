@@ -54,6 +54,9 @@ export interface VerdictResult {
   cautions: string[]
 }
 
+/** The columns that decideVerdicts fills; the others stand in the summary. */
+export type DecidedColumns = ReturnType<typeof emptyColumns>
+
 /** Columns of `features` rows with nothing decided. */
 export function emptyColumns(features: number) {
   const numbers = () => new Float64Array(features).fill(Number.NaN)
