@@ -4,6 +4,7 @@ const file: RightsFile = {
   rows: [
     { route: 'GET /api/studies/[studyId]/samples', needs: 'readStudy' },
     { route: 'PATCH /api/studies/[studyId]/samples', needs: 'editStudy', body: () => ({ added: [] }) },
+    { route: 'GET /api/studies/[studyId]/samples/csv', needs: 'export' },
   ],
 }
 export default file
