@@ -8,6 +8,8 @@ import { issueFirstCode } from '../domain/person/firstLabLead'
 import { addressProblem, dataFolder, laboratoryKind, ownAddress } from '../utils/environment'
 import { sealingSecret } from '../utils/sealingSecret'
 import { emptyIncoming } from '../domain/table/incoming'
+import { sweepFiles } from '../domain/table/originals'
+import { dropExpiredUploads } from '../domain/table/removeUpload'
 
 /** Opens the laboratory before the first request: folder, lock, migrations, sealing secret, jobs. */
 export default defineNitroPlugin((nitro) => {
@@ -24,6 +26,8 @@ export default defineNitroPlugin((nitro) => {
     if (notice) console.warn(notice)
     const open = await openDatabase(folder, kind, migrations)
     emptyIncoming(folder)
+    sweepFiles(open.db, folder)
+    dropExpiredUploads(open.db, folder)
     // Read by nuxt-auth-utils at each request.
     process.env.NUXT_SESSION_PASSWORD ||= sealingSecret(folder)
     const jobs = new Jobs({ db: open.db, folder }, jobKinds, workerSources)

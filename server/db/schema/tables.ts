@@ -2,6 +2,7 @@ import { blob, index, integer, real, sqliteTable, text } from 'drizzle-orm/sqlit
 import type { MassKind, Measure, TableLayout } from '../../../shared/science/table/layout'
 import type { RememberedAnswers } from '../../../shared/science/table/rememberAnswers'
 import type { ProposalBasis } from '../../../shared/science/table/tableProposal'
+import type { UploadStatus } from '../../../shared/types/table'
 import { createdAt, id, moment } from './columns'
 import { people } from './people'
 import { samples, studies } from './studies'
@@ -26,9 +27,6 @@ export const layouts = sqliteTable('layouts', {
   createdBy: text().notNull().references(() => people.id),
   createdAt: createdAt(),
 }, table => [index('layouts_fingerprint').on(table.fingerprint)])
-
-/** reading: a job is at it. waiting: a person must answer. read: its tables stand. refused: nothing of it is kept but this row. */
-export type UploadStatus = 'reading' | 'waiting' | 'read' | 'refused'
 
 /** One file a person sent, and what became of it. */
 export const uploads = sqliteTable('uploads', {

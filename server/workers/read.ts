@@ -1,0 +1,95 @@
+import { createHash } from 'node:crypto'
+import { createReadStream, createWriteStream, mkdirSync, renameSync, rmSync, statSync } from 'node:fs'
+import { dirname } from 'node:path'
+import { pipeline } from 'node:stream/promises'
+import { parentPort, workerData, type Transferable } from 'node:worker_threads'
+import { createGunzip, createGzip, gzipSync } from 'node:zlib'
+import { readTable } from '../../shared/formats/delimitedText/readTable'
+import { surveyTable } from '../../shared/formats/delimitedText/surveyTable'
+import type { BuiltColumns, SampleFeatures } from '../../shared/science/table/buildColumns'
+import type { TableLayout } from '../../shared/science/table/layout'
+import { packColumns } from '../../shared/science/table/packColumns'
+import { proposeLayout } from '../../shared/science/table/proposeLayout'
+import { recallAnswers } from '../../shared/science/table/rememberAnswers'
+import type { ProposalBasis, TableProposal } from '../../shared/science/table/tableProposal'
+import { TableRefused } from '../../shared/science/table/tableRefused'
+import type { ReadTable, ReadTask, ReadUpload } from '../domain/table/readUpload'
+
+const task = workerData as ReadTask
+const post = (message: unknown, transfer: Transferable[] = []) => parentPort?.postMessage(message, transfer)
+
+/** The file from its first byte, unpacked where it is an original. */
+function open() {
+  const stream = createReadStream(task.path, { highWaterMark: 65_536 })
+  return task.compressed ? stream.pipe(createGunzip()) : stream
+}
+
+async function read(): Promise<{ result: ReadUpload, transfer: Transferable[] }> {
+  const basis = task.basis ?? await look()
+  const proposal = proposeLayout(basis.survey, basis.answers, basis.remembered)
+  if (proposal.refuse !== null) throw new TableRefused(proposal.refuse)
+  const { layout } = proposal
+  const settled = layout !== null && (task.decided || proposal.confirmations.length === 0)
+  const waiting = async (remark: string | null) => ({ result: { kind: 'waiting' as const, basis, fingerprint: proposal.fingerprint, compressedBytes: await keepOriginal(), remark }, transfer: [] })
+  if (!settled || layout === null) return waiting(null)
+  try {
+    return await readWith(layout, basis, proposal)
+  }
+  catch (error) {
+    if (error instanceof TableRefused) return waiting(error.message)
+    throw error
+  }
+}
+
+async function look(): Promise<ProposalBasis> {
+  post({ progress: 0.05, message: `Looking through ${task.fileName}.` })
+  const survey = await surveyTable(open)
+  const { fingerprint } = proposeLayout(survey)
+  const layout = task.layouts.find(one => one.fingerprint === fingerprint)
+  return { survey, answers: layout ? recallAnswers(survey, layout.answers) : {}, remembered: layout !== undefined }
+}
+
+async function readWith(layout: TableLayout, basis: ProposalBasis, proposal: TableProposal) {
+  const { rows } = basis.survey
+  const built = await readTable(open(), layout, rows, seen => post({ progress: 0.3 + 0.4 * Math.min(1, seen / Math.max(1, rows)), message: `Reading ${task.fileName}: ${seen.toLocaleString('en')} of ${rows.toLocaleString('en')} rows.` }))
+  post({ progress: 0.75, message: `Keeping ${task.fileName}.` })
+  const compressedBytes = await keepOriginal()
+  const tables = built.samples.map(sample => readSample(sample, built, layout))
+  const result: ReadUpload = { kind: 'read', basis, fingerprint: proposal.fingerprint, layout, compressedBytes, tables, rowsRead: built.rowsRead, skipped: built.skipped, cautions: proposal.cautions }
+  const transfer = tables.flatMap(table => [table.mz, table.minutes, table.intensity, table.width, table.row].flatMap(column => column ? [column.buffer as ArrayBuffer] : []))
+  return { result, transfer }
+}
+
+function readSample(sample: SampleFeatures, built: BuiltColumns, layout: TableLayout): ReadTable {
+  const { row, ...columns } = sample.take()
+  const hash = createHash('sha256')
+  for (const part of packColumns(columns)) hash.update(part)
+  // A refused cell belongs to its sample, a refused row to every sample of the file.
+  const others = new Set(layout.sampleColumns.flatMap(one => one.name === sample.name ? [] : [one.column, one.minutesColumn]).map(column => column === null ? '' : layout.header[column]?.trim()))
+  const refused = built.refused.filter(one => sample.name === null || !others.has(one.column))
+  return { ...columns, row, name: sample.name, emptyShare: sample.emptyShare, digest: hash.digest('hex'), refusedRows: refused.length, refused: refused.length > 0 ? gzipSync(JSON.stringify(refused)) : null }
+}
+
+/** Compresses the file to its place among the originals: written beside it and renamed, so that the place never holds half a file. */
+async function keepOriginal(): Promise<number | null> {
+  if (task.compressed) return null
+  mkdirSync(dirname(task.originalPath), { recursive: true, mode: 0o700 })
+  const part = `${task.originalPath}.${task.uploadId}.part`
+  try {
+    await pipeline(createReadStream(task.path), createGzip({ level: 4 }), createWriteStream(part, { mode: 0o600, flush: true }))
+    renameSync(part, task.originalPath)
+  }
+  catch (error) {
+    rmSync(part, { force: true })
+    throw error
+  }
+  return statSync(task.originalPath).size
+}
+
+read().then(
+  ({ result, transfer }) => post({ result }, transfer),
+  (error: unknown) => {
+    if (error instanceof TableRefused) post({ refusal: error.message })
+    else throw error
+  },
+)
