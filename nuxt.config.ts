@@ -5,9 +5,6 @@ import { bundleWorker } from './scripts/bundleWorker'
 
 const root = (path: string) => fileURLToPath(new URL(path, import.meta.url))
 
-/** Megabytes a feature table may have; the same limit is named in shared/schemas/table. */
-const TABLE_BYTES = 64 * 2 ** 20
-
 /**
  * Every file in server/workers is bundled to text, so that built output needs no path to it (see DEVELOPERS.md).
  * Base64, because the build replaces words such as `typeof window` inside plain text too, and breaks it.
@@ -67,7 +64,8 @@ export default defineNuxtConfig({
   routeRules: {
     '/**': { headers: { 'cache-control': 'no-store' } },
     '/_nuxt/**': { headers: { 'cache-control': 'public, max-age=31536000, immutable' } },
-    '/api/studies/*/uploads': { security: { requestSizeLimiter: { maxRequestSizeInBytes: TABLE_BYTES + 1 } } },
+    // Counted and refused with a sentence by receiveFile (MAX_TABLE_BYTES in shared/schemas/table).
+    '/api/studies/*/uploads': { security: { requestSizeLimiter: { maxRequestSizeInBytes: 2 ** 40 } } },
   },
   nitro: {
     compressPublicAssets: true,

@@ -1,4 +1,4 @@
-import { compare, read } from './compare'
+import { compare } from './compare'
 import type { JobKind } from './kind'
 import { read } from './read'
 

@@ -2,7 +2,7 @@ import { z } from 'zod'
 import { idField } from './fields'
 import type { LayoutAnswers } from '../science/table/layout'
 
-/** Bytes a feature table may have; nuxt.config.ts lets no larger body in. */
+/** Bytes a feature table may have. */
 export const MAX_TABLE_BYTES = 64 * 2 ** 20
 /** Days that a file waits for a person's answer. */
 export const WAITING_DAYS = 14
