@@ -1,4 +1,4 @@
-import type { Server } from 'node:http'
+import { Server } from 'node:http'
 import type { Socket } from 'node:net'
 import type { H3Event } from 'h3'
 import { DomainError } from '../domain/DomainError'
@@ -33,10 +33,10 @@ export async function readUploadBody(event: H3Event, folder: string): Promise<Re
 const uploading = new WeakMap<Server, { count: number, timeout: number }>()
 
 /** Node gives a whole request five minutes, a slow line and 64 MB need more: off while uploads run, and silence is watched instead. */
-function liftRequestTimeout(socket: Socket & { server?: Server }): () => void {
-  const { server } = socket
+function liftRequestTimeout(socket: Socket): () => void {
+  const server: unknown = Reflect.get(socket, 'server')
   socket.setTimeout(SILENCE_MS, () => socket.destroy())
-  if (!server) return () => socket.setTimeout(0)
+  if (!(server instanceof Server)) return () => socket.setTimeout(0)
   const state = uploading.get(server) ?? { count: 0, timeout: server.requestTimeout }
   uploading.set(server, state)
   state.count++
