@@ -1,4 +1,5 @@
 import type { FlagKind } from '../schemas/flag'
+import type { Verdict } from '../science/verdict/verdicts'
 
 /** A flag that stands, as a page reads it. */
 export interface FlagLine {
@@ -9,4 +10,26 @@ export interface FlagLine {
   /** Name of who set it, and when. */
   by: string
   at: string
+}
+
+/** A flagged feature in the list of a study. */
+export interface FlaggedFeature extends FlagLine {
+  alignmentId: string
+  alignmentNumber: number
+  practice: boolean
+  mz: number
+  retentionMinutes: number
+  /** The newest version that rests on its alignment, and its verdict there; null where there is none. */
+  judged: JudgedFeature | null
+}
+
+export interface JudgedFeature {
+  comparisonId: string
+  title: string
+  versionNumber: number
+  sideAName: string
+  sideBName: string
+  verdict: Verdict
+  /** The verdict in words. */
+  phrase: string
 }

@@ -12,7 +12,7 @@ export function addFlags(db: Database, alignment: VisibleAlignment, input: FlagI
   const features = [...new Set(input.featureIndexes)].sort((a, b) => a - b)
   const beyond = features.find(index => index >= alignment.groups)
   if (beyond !== undefined) {
-    const sentence = `There is no feature ${beyond} in this alignment: it has ${alignment.groups}.`
+    const sentence = `There is no feature ${beyond + 1} in this alignment: it has ${alignment.groups}.`
     throw new DomainError('invalid', sentence, [{ field: 'featureIndexes', sentence }])
   }
   return db.transaction((tx) => {
@@ -27,8 +27,8 @@ export function addFlags(db: Database, alignment: VisibleAlignment, input: FlagI
 
 const NAMED_FEATURES = 20
 
-/** The act in words. What is said on practice work stays with its maker. */
+/** The act in words, features numbered from 1 as on the page. What is said on practice work stays with its maker. */
 function flagDetail(alignment: VisibleAlignment, features: number[], { kind, reason }: FlagInput): string {
-  const which = features.length > NAMED_FEATURES ? `${features.length} features` : `feature ${features.join(', ')}`
+  const which = features.length > NAMED_FEATURES ? `${features.length} features` : `feature ${features.map(index => index + 1).join(', ')}`
   return alignment.practice ? `${which} of practice alignment ${alignment.number}` : `${flagKindNames[kind]}: ${which} of alignment ${alignment.number}: ${reason}`
 }

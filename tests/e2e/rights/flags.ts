@@ -17,6 +17,7 @@ const file: RightsFile = {
     fixture.flagPracticeId = addTestAlignment(laboratory, studyId, studentId, { practice: true }).id
   },
   rows: [
+    { route: 'GET /api/studies/[studyId]/flags', needs: 'readStudy' },
     { route: route('GET'), needs: 'readStudy', ...official },
     { route: route('POST'), needs: 'flag', body: flag, ...official },
     { route: route('PATCH'), needs: 'flag', ok: 400, ...official },

@@ -35,7 +35,7 @@ describe('flags', () => {
     ])
     expect(listed.map(flag => flag.id).sort()).toEqual([...flagIds].sort())
     expect(Math.abs((listed[0]?.at.getTime() ?? 0) - Date.now())).toBeLessThan(60_000)
-    expect(acts()).toEqual([{ action: 'flag features', detail: `contaminant: feature 2, 7 of alignment ${alignment.number}: A plasticiser of the vials.`, personId: scientist.id }])
+    expect(acts()).toEqual([{ action: 'flag features', detail: `contaminant: feature 3, 8 of alignment ${alignment.number}: A plasticiser of the vials.`, personId: scientist.id }])
   })
 
   it('are taken back and set again, and the record keeps each act', () => {
@@ -56,7 +56,7 @@ describe('flags', () => {
   })
 
   it('beyond the last feature are refused, and none of the same act is set', () => {
-    expect(() => addFlags(laboratory.db, alignment, { featureIndexes: [9, 10], kind: 'artefact', reason: 'Ringing.' }, scientist)).toThrow('There is no feature 10 in this alignment: it has 10.')
+    expect(() => addFlags(laboratory.db, alignment, { featureIndexes: [9, 10], kind: 'artefact', reason: 'Ringing.' }, scientist)).toThrow('There is no feature 11 in this alignment: it has 10.')
     expect(listFlags(laboratory.db, alignment.id)).toEqual([])
     expect(acts()).toEqual([])
   })
@@ -84,6 +84,6 @@ describe('who may flag', () => {
     expect(() => findVisibleAlignment(laboratory.db, addTestStudy(laboratory, student).id, alignment.id, scientist)).toThrow('nothing at this address')
 
     addFlags(laboratory.db, found, { featureIndexes: [3], kind: 'askAgain', reason: 'My own guess.' }, student)
-    expect(acts().map(act => act.detail)).toEqual([`feature 3 of practice alignment ${practice.number}`])
+    expect(acts().map(act => act.detail)).toEqual([`feature 4 of practice alignment ${practice.number}`])
   })
 })
