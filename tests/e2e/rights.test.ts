@@ -10,7 +10,7 @@ import { Jobs } from '../../server/jobs/runner'
 import { roles } from '../../shared/permissions'
 import { startBuiltServer, type BuiltServer } from '../support/builtServer'
 import { addTestPerson, addTestStudy, migrations, type TestLaboratory } from '../support/laboratory'
-import { addressOf, askers, expectedStatus, routesIn, type Asker, type Fixture, type RightsFile } from '../support/rights'
+import { addressOf, askers, expectedGuestStatus, expectedStatus, guestLinks, routesIn, secretName, type Asker, type Fixture, type RightsFile } from '../support/rights'
 import { signInCookie, testPasswordHash } from '../support/signIn'
 import { secondConnection } from '../support/secondConnection'
 
@@ -83,5 +83,24 @@ describe('every route, asked by everyone', () => {
       expected[asker] = expectedStatus(row, asker)
     }
     expect(statuses).toEqual(expected)
+  })
+})
+
+describe('every shared route, asked with each kind of link', () => {
+  it.each(rows.filter(row => row.route.includes('/api/shared/')).map(row => [row.route, row] as const))('%s', async (_, row) => {
+    const answers = await Promise.all(guestLinks.map(async (link) => {
+      const { path } = addressOf({ ...row, from: { secret: secretName(link) } }, fixture)
+      const response = await fetch(server.url + path)
+      const body = (await response.text()).replaceAll(fixture[secretName(link)] ?? '', '')
+      expect(response.headers.get('cache-control')).toBe('no-store')
+      expect(response.headers.get('referrer-policy')).toBe('no-referrer')
+      expect(server.output()).not.toContain(fixture[secretName(link)])
+      return { link, status: response.status, body }
+    }))
+    expect(Object.fromEntries(answers.map(({ link, status }) => [link, status]))).toEqual(Object.fromEntries(guestLinks.map(link => [link, expectedGuestStatus(row, link)])))
+    const bodies = new Map(answers.map(({ link, body }) => [link, body]))
+    // Wrong, ended and withdrawn can't be told apart; another version's link shows its own data.
+    expect(new Set([bodies.get('wrong'), bodies.get('ended'), bodies.get('withdrawn')]).size).toBe(1)
+    expect(bodies.get('otherVersion')).not.toBe(bodies.get('right'))
   })
 })

@@ -1,5 +1,7 @@
 import { gzipSync } from 'node:zlib'
+import { and, eq } from 'drizzle-orm'
 import type { OpenDatabase } from '../../server/db/open'
+import { comparisonVersions } from '../../server/db/schema'
 import { alignmentData } from '../../server/domain/comparison/alignmentData'
 import { keepVersion } from '../../server/domain/comparison/keepVersion'
 import { snapshotSamples } from '../../server/domain/comparison/snapshotSamples'
@@ -16,4 +18,11 @@ export function addKeptComparison({ db }: Pick<OpenDatabase, 'db'>, studyId: str
   const result = decideVerdicts(summariseSides({ ...alignmentData(db, alignmentId), samples, normaliseByAmount: all.normaliseByAmount }), all)
   return keepVersion(db, studyId, { comparisonId, title, practice, alignmentId, sideAName: 'Millrace', sideBName: 'Tallow Lane', settings: all, samples: samples.map(storeSample) },
     { samples, counts: result.counts, cautions: result.cautions, columns: gzipSync(packVerdicts(result)) }, createdBy)
+}
+
+/** The id of a version by its number. */
+export function versionIdOf({ db }: Pick<OpenDatabase, 'db'>, comparisonId: string, number = 1): string {
+  const version = db.select({ id: comparisonVersions.id }).from(comparisonVersions).where(and(eq(comparisonVersions.comparisonId, comparisonId), eq(comparisonVersions.number, number))).get()
+  if (!version) throw new Error(`comparison ${comparisonId} has no version ${number}`)
+  return version.id
 }

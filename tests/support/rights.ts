@@ -7,6 +7,12 @@ import type { TestLaboratory } from './laboratory'
 export const askers = ['visitor', 'closed', 'stranger', 'analyst', 'scientist', 'reviewer', 'student', 'labLead'] as const
 export type Asker = (typeof askers)[number]
 
+/** Links a guest may hold. `closedMaker`: of a person whose account is closed now, which stays in force. `otherVersion`: opens its own version. */
+export const guestLinks = ['right', 'withoutExport', 'closedMaker', 'otherVersion', 'wrong', 'ended', 'withdrawn'] as const
+export type GuestLink = (typeof guestLinks)[number]
+/** Where the fixture holds the secret of each. */
+export const secretName = (link: GuestLink) => `${link}Secret`
+
 /** Ids the rows put into addresses, by name. `studyId` is a restricted study whose members are the five roles. */
 export type Fixture = Record<string, string>
 
@@ -23,6 +29,8 @@ export interface RightsRow {
   from?: Record<string, string>
   /** Where one asker differs from the rule. */
   except?: Partial<Record<Asker, number>>
+  /** Rows below /api/shared: where a link differs from the rule that what is in force opens and all else is 404. */
+  guest?: Partial<Record<GuestLink, number>>
   /** Runs before each request, on the same database as the server. */
   before?: (fixture: Fixture, laboratory: TestLaboratory) => void
 }
@@ -51,6 +59,11 @@ export function expectedStatus(row: RightsRow, asker: Asker): number {
   if (asker === 'stranger' && row.route.includes('[studyId]')) return 404
   if (row.needs === 'signedIn') return ok
   return can({ roles: rolesOf[asker] }, row.needs) ? ok : 403
+}
+
+export function expectedGuestStatus(row: RightsRow, link: GuestLink): number {
+  const closed: readonly GuestLink[] = ['wrong', 'ended', 'withdrawn']
+  return row.guest?.[link] ?? (closed.includes(link) ? 404 : row.ok ?? 200)
 }
 
 /** Every route file as `METHOD /api/path`. */

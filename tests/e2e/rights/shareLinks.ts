@@ -1,6 +1,6 @@
 import { createShareLink } from '../../../server/domain/share/createShareLink'
-import { addTestAlignment } from '../../support/testAlignment'
-import { addTestComparison, addTestVersion } from '../../support/testComparison'
+import { addComparedAlignment } from '../../support/comparedAlignment'
+import { addKeptComparison, versionIdOf } from '../../support/keptComparison'
 import type { RightsFile, RightsRow } from '../../support/rights'
 
 /** A link of the analyst's version, new for each request. */
@@ -12,8 +12,8 @@ const before: RightsRow['before'] = (fixture, { db }) => {
 const file: RightsFile = {
   prepare: (fixture, laboratory) => {
     const { studyId = '', analystId = '' } = fixture
-    const alignment = addTestAlignment(laboratory, studyId, analystId)
-    fixture.shareVersionId = addTestVersion(laboratory, addTestComparison(laboratory, studyId, analystId), alignment.id).id
+    const { alignment } = addComparedAlignment(laboratory, studyId, analystId, [{ name: 'share A', side: 'A', intensity: [1000] }, { name: 'share B', side: 'B', intensity: [4000] }])
+    fixture.shareVersionId = versionIdOf(laboratory, addKeptComparison(laboratory, studyId, analystId, alignment.id))
   },
   rows: [
     { route: 'GET /api/studies/[studyId]/share-links', needs: 'share' },

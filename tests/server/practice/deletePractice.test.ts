@@ -4,9 +4,9 @@ import { addFlags } from '../../../server/domain/flag/addFlags'
 import type { Person } from '../../../server/domain/person/person'
 import { deletePracticeAlignment } from '../../../server/domain/practice/deletePracticeAlignment'
 import { deletePracticeComparison } from '../../../server/domain/practice/deletePracticeComparison'
+import { addComparedAlignment } from '../../support/comparedAlignment'
+import { addKeptComparison } from '../../support/keptComparison'
 import { addTestPerson, addTestStudy, openTestLaboratory, type TestLaboratory } from '../../support/laboratory'
-import { addTestAlignment } from '../../support/testAlignment'
-import { addTestComparison, addTestVersion } from '../../support/testComparison'
 
 let laboratory: TestLaboratory
 let student: Person
@@ -23,12 +23,11 @@ afterEach(() => laboratory.close())
 
 /** An alignment with a comparison of it, practice or official. */
 function work(person: Person, practice: boolean) {
-  const alignment = addTestAlignment(laboratory, studyId, person.id, { practice })
-  const comparison = addTestComparison(laboratory, studyId, person.id, { practice })
-  addTestVersion(laboratory, comparison, alignment.id)
-  addTestVersion(laboratory, comparison, alignment.id)
-  addFlags(laboratory.db, alignment, { featureIndexes: [1], kind: 'ofInterest', reason: 'To see it go.' }, person)
-  return { alignment, comparison }
+  const { alignment } = addComparedAlignment(laboratory, studyId, person.id, [{ name: `A ${person.id}`, side: 'A', intensity: [1000] }, { name: `B ${person.id}`, side: 'B', intensity: [4000] }], { practice })
+  const comparisonId = addKeptComparison(laboratory, studyId, person.id, alignment.id, { practice })
+  addKeptComparison(laboratory, studyId, person.id, alignment.id, { practice, comparisonId })
+  addFlags(laboratory.db, alignment, { featureIndexes: [0], kind: 'ofInterest', reason: 'To see it go.' }, person)
+  return { alignment, comparisonId }
 }
 const left = () => [alignments, comparisons, comparisonVersions, flags].map(table => laboratory.db.$count(table))
 
@@ -44,24 +43,24 @@ describe('one\'s own practice', () => {
   })
 
   it('comparison is deleted and its alignment stays', async () => {
-    const { comparison } = work(student, true)
-    deletePracticeComparison(laboratory.db, studyId, comparison.id, student)
+    const { comparisonId } = work(student, true)
+    deletePracticeComparison(laboratory.db, studyId, comparisonId, student)
     expect(await Promise.all(left())).toEqual([1, 0, 0, 1])
   })
 })
 
 describe('what stays', () => {
   it('another person\'s practice, which looks as if it were not there', async () => {
-    const { alignment, comparison } = work(student, true)
+    const { alignment, comparisonId } = work(student, true)
     expect(() => deletePracticeAlignment(laboratory.db, studyId, alignment.id, lead)).toThrow('nothing at this address')
-    expect(() => deletePracticeComparison(laboratory.db, studyId, comparison.id, lead)).toThrow('nothing at this address')
+    expect(() => deletePracticeComparison(laboratory.db, studyId, comparisonId, lead)).toThrow('nothing at this address')
     expect(await Promise.all(left())).toEqual([1, 1, 2, 1])
   })
 
   it('official work, even for who made it', async () => {
-    const { alignment, comparison } = work(lead, false)
+    const { alignment, comparisonId } = work(lead, false)
     expect(() => deletePracticeAlignment(laboratory.db, studyId, alignment.id, lead)).toThrow('Official alignments are kept')
-    expect(() => deletePracticeComparison(laboratory.db, studyId, comparison.id, lead)).toThrow('Official comparisons are kept')
+    expect(() => deletePracticeComparison(laboratory.db, studyId, comparisonId, lead)).toThrow('Official comparisons are kept')
     expect(await Promise.all(left())).toEqual([1, 1, 2, 1])
   })
 

@@ -1,30 +1,39 @@
 import { eq } from 'drizzle-orm'
 import { afterEach, beforeEach, describe, expect, it } from 'vitest'
-import { activity, people, secrets } from '../../../server/db/schema'
+import { activity, people, secrets, studies } from '../../../server/db/schema'
 import { createShareLink } from '../../../server/domain/share/createShareLink'
 import { listShareLinks } from '../../../server/domain/share/listShareLinks'
 import { openShareLink } from '../../../server/domain/share/openShareLink'
+import { readSharedComparison } from '../../../server/domain/share/readSharedComparison'
+import { sharedCsv } from '../../../server/domain/share/sharedCsv'
+import { sharedData } from '../../../server/domain/share/sharedData'
 import { withdrawShareLink } from '../../../server/domain/share/withdrawShareLink'
 import type { Person } from '../../../server/domain/person/person'
 import { hashSecret } from '../../../server/domain/secret/secret'
+import { unpackComparisonData } from '../../../shared/formats/comparisonData'
 import { shareSchema } from '../../../shared/schemas/share'
+import { addComparedAlignment } from '../../support/comparedAlignment'
+import { addKeptComparison, versionIdOf } from '../../support/keptComparison'
 import { addTestPerson, addTestStudy, openTestLaboratory, type TestLaboratory } from '../../support/laboratory'
-import { addTestAlignment } from '../../support/testAlignment'
-import { addTestComparison, addTestVersion } from '../../support/testComparison'
 
 const DAY_MS = 86_400_000
 let laboratory: TestLaboratory
 let reviewer: Person
 let studyId: string
+let comparisonId: string
 let versionId: string
+
+/** An alignment of one sample a side, two features. */
+const alignmentOf = (person: Person, b: number, practice = false) =>
+  addComparedAlignment(laboratory, studyId, person.id, [{ name: `A against ${b}`, side: 'A', intensity: [1000, 900] }, { name: `B of ${b}`, side: 'B', intensity: [1000, b] }], { practice }).alignment.id
 
 beforeEach(async () => {
   laboratory = await openTestLaboratory()
   const analyst = addTestPerson(laboratory, 'analyst')
   reviewer = addTestPerson(laboratory, 'reviewer')
   studyId = addTestStudy(laboratory, analyst).id
-  const alignment = addTestAlignment(laboratory, studyId, analyst.id)
-  versionId = addTestVersion(laboratory, addTestComparison(laboratory, studyId, analyst.id), alignment.id).id
+  comparisonId = addKeptComparison(laboratory, studyId, analyst.id, alignmentOf(analyst, 4000))
+  versionId = versionIdOf(laboratory, comparisonId)
 })
 afterEach(() => laboratory.close())
 
@@ -93,7 +102,7 @@ describe('a share link', () => {
       { label: 'second', state: 'withdrawn', versionNumber: 1, by: reviewer.name },
       { label: 'first', state: 'ended', versionNumber: 1, by: reviewer.name },
     ])
-    expect(laboratory.db.select().from(activity).all().map(act => act.action)).toEqual(['make share link', 'make share link', 'make share link', 'withdraw share link'])
+    expect(laboratory.db.select().from(activity).all().map(act => act.action).filter(action => action.includes('link'))).toEqual(['make share link', 'make share link', 'make share link', 'withdraw share link'])
   })
 
   it('can\'t be withdrawn twice, nor through another study', () => {
@@ -113,10 +122,9 @@ describe('what can be shared', () => {
 
   it('not practice work: not there for others, refused to its maker', () => {
     const lead = addTestPerson(laboratory, 'labLead')
-    const alignment = addTestAlignment(laboratory, studyId, lead.id, { practice: true })
-    const practice = addTestVersion(laboratory, addTestComparison(laboratory, studyId, lead.id, { practice: true }), alignment.id)
-    expect(() => make({ versionId: practice.id })).toThrow('nothing at this address')
-    expect(() => createShareLink(laboratory.db, studyId, { versionId: practice.id, label: '', days: 30, allowExport: false }, lead)).toThrow('Practice work')
+    const practice = versionIdOf(laboratory, addKeptComparison(laboratory, studyId, lead.id, alignmentOf(lead, 4000, true), { practice: true }))
+    expect(() => make({ versionId: practice })).toThrow('nothing at this address')
+    expect(() => createShareLink(laboratory.db, studyId, { versionId: practice, label: '', days: 30, allowExport: false }, lead)).toThrow('Practice work')
   })
 
   it('for 1 to 365 whole days, 30 unless said', () => {
@@ -124,3 +132,32 @@ describe('what can be shared', () => {
     for (const days of [0, 366, 1.5, Number.NaN]) expect(shareSchema.safeParse({ versionId, days }).success).toBe(false)
   })
 })
+
+describe('what a guest reads', () => {
+  const open = (secret: string) => openShareLink(laboratory.db, secret)
+
+  it('is one version: nothing of a later one, of the study or of people', async () => {
+    const { secret } = make({ allowExport: true })
+    const before = JSON.stringify(readSharedComparison(laboratory.db, open(secret)))
+    addKeptComparison(laboratory, studyId, reviewer.id, alignmentOf(reviewer, 90_000), { comparisonId, settings: { reachLimit: 7 } })
+    const shared = readSharedComparison(laboratory.db, open(secret))
+    expect(JSON.stringify(shared)).toBe(before)
+    expect(Object.keys(shared).sort()).toEqual(['alignMassPpm', 'cautions', 'counts', 'createdAt', 'endsAt', 'engineVersion', 'mayExport', 'number', 'samples', 'settings', 'sideAName', 'sideBName', 'title'])
+    const data = unpackComparisonData(sharedData(laboratory.db, open(secret)))
+    const csv = await textOf(sharedCsv(laboratory.db, open(secret)))
+    expect(data.intensity.map(column => [...column])).toEqual([[1000, 900], [1000, 4000]])
+    const study = laboratory.db.select().from(studies).where(eq(studies.id, studyId)).get()
+    for (const text of [before, csv]) for (const name of [reviewer.name, study?.title ?? '', studyId, comparisonId]) expect(text).not.toContain(name)
+    expect(csv).toContain('It does not mean absent.')
+  })
+
+  it('is downloaded only where the link allows it', () => {
+    expect(() => sharedCsv(laboratory.db, open(make().secret))).toThrow('does not allow downloads')
+  })
+})
+
+async function textOf({ chunks }: { chunks: AsyncGenerator<string> }) {
+  let text = ''
+  for await (const chunk of chunks) text += chunk
+  return text
+}
