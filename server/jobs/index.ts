@@ -1,3 +1,4 @@
+import { align } from './align'
 import { compare } from './compare'
 import type { JobKind } from './kind'
 import { read } from './read'
@@ -6,4 +7,4 @@ import { read } from './read'
 type AnyKind = JobKind<any, any>
 
 /** Every kind of job by its name. One file a kind in this folder. */
-export const jobKinds: Record<string, AnyKind> = { compare, read }
+export const jobKinds: Record<string, AnyKind> = { align, compare, read }

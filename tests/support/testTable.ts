@@ -1,0 +1,33 @@
+import { createHash } from 'node:crypto'
+import type { OpenDatabase } from '../../server/db/open'
+import { packFloat64, packInt32 } from '../../server/db/packed'
+import { originals, samples, tables, uploads } from '../../server/db/schema'
+import type { SampleInput } from '../../shared/schemas/sample'
+import type { MassKind, TableLayout } from '../../shared/science/table/layout'
+
+export interface TestTable {
+  mz: readonly number[] | Float64Array
+  minutes: readonly number[] | Float64Array
+  intensity: readonly number[] | Float64Array
+  massKind?: MassKind
+  wideGroup?: string
+  wideRow?: readonly number[]
+}
+
+let made = 0
+
+/** A table as if it had been uploaded and read, and its sample; `sample: null` leaves it without one. */
+export function addTestTable({ db }: Pick<OpenDatabase, 'db'>, studyId: string, createdBy: string, table: TestTable, sample: (Partial<SampleInput> & { name: string }) | null) {
+  const [mz, retentionMinutes, intensity] = [table.mz, table.minutes, table.intensity].map(column => packFloat64(Float64Array.from(column)))
+  if (!mz || !retentionMinutes || !intensity) throw new Error('a table has three columns')
+  const digest = createHash('sha256').update(mz).update(retentionMinutes).update(intensity).digest('hex')
+  const fileName = `${sample?.name ?? `table ${++made}`}.csv`
+  db.insert(originals).values({ sha256: digest, bytes: 1, compressedBytes: 1 }).onConflictDoNothing().run()
+  const upload = db.insert(uploads).values({ studyId, fileName, sha256: digest, bytes: 1, status: 'read', createdBy }).returning().get()
+  const sampleId = sample ? db.insert(samples).values({ studyId, position: ++made, ...sample }).returning().get().id : null
+  return db.insert(tables).values({
+    studyId, uploadId: upload.id, sampleId, originalSha256: digest, fileName, digest, layout: {} as TableLayout, measure: 'area', massKind: table.massKind ?? 'mz',
+    features: table.mz.length, mz, retentionMinutes, intensity, createdBy,
+    wideGroup: table.wideGroup ?? null, wideRow: table.wideRow ? packInt32(Int32Array.from(table.wideRow)) : null, columnName: table.wideGroup ? sample?.name ?? null : null,
+  }).returning().get()
+}
