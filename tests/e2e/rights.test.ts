@@ -92,7 +92,7 @@ describe('every shared route, asked with each kind of link', () => {
       const { path } = addressOf({ ...row, from: { secret: secretName(link) } }, fixture)
       const response = await fetch(server.url + path)
       const body = (await response.text()).replaceAll(fixture[secretName(link)] ?? '', '')
-      expect(response.headers.get('cache-control')).toBe('no-store')
+      expect(response.headers.get('cache-control')).toBe(response.status === 404 ? 'no-cache' : 'no-store')
       expect(response.headers.get('referrer-policy')).toBe('no-referrer')
       expect(server.output()).not.toContain(fixture[secretName(link)])
       return { link, status: response.status, body }
