@@ -38,7 +38,10 @@ export default defineNitroPlugin((nitro) => {
 
   /** A demo laboratory has its accounts at once; a real one without any shows how to make the first. */
   async function welcome(db: Database) {
-    if (kind === 'demo') return addDemoAccounts(db, passwordHasher)
+    if (kind === 'demo') {
+      await addDemoAccounts(db, passwordHasher)
+      return startDemo(useLaboratory())
+    }
     const code = issueFirstCode(db)
     if (code) console.log(`This laboratory has no account yet. Open ${ownAddress()}/first and make the first lab lead with this code (24 hours, once):\n\n    ${code}\n`)
   }
@@ -47,6 +50,7 @@ export default defineNitroPlugin((nitro) => {
   nitro.hooks.hook('close', async () => {
     await opening
     const { jobs, close } = useLaboratory()
+    await stopDemo()
     await jobs.stop()
     close()
     setLaboratory(undefined)

@@ -20,8 +20,7 @@ export interface TestLaboratory extends OpenDatabase { folder: string, jobs: Job
 export async function openTestLaboratory(workers: string[] = []): Promise<TestLaboratory> {
   const folder = mkdtempSync(join(tmpdir(), 'steelyard-test-'))
   const open = await openDatabase(folder, 'lab', migrations)
-  const sources = Object.fromEntries(workers.map(name => [name, bundleWorker(root(`server/workers/${name}.ts`))]))
-  const jobs = new Jobs({ db: open.db, folder }, jobKinds, sources)
+  const jobs = new Jobs({ db: open.db, folder }, jobKinds, workerSources(workers))
   return {
     ...open,
     folder,
@@ -32,6 +31,11 @@ export async function openTestLaboratory(workers: string[] = []): Promise<TestLa
       rmSync(folder, { recursive: true })
     },
   }
+}
+
+/** The workers' bundles by name, as a job runner takes them. */
+export function workerSources(workers: string[]): Record<string, string> {
+  return Object.fromEntries(workers.map(name => [name, bundleWorker(root(`server/workers/${name}.ts`))]))
 }
 
 let made = 0

@@ -4,12 +4,14 @@ import type { DemoStudy } from './studies'
 
 export interface DemoFile { name: string, text: string }
 
+export const fileNameOf = (sampleName: string) => `${sampleName}.csv`
+
 /** The study's exported files as an instrument's software might have written them: one a sample, or one wide file. */
 export function exportFiles(study: DemoStudy): DemoFile[] {
   const tables = simulateStudy(study)
   if (study.fileStyle === 'wide') return [{ name: `${study.seed}.csv`, text: wideText(study.sheet.map(sample => sample.name), tables) }]
   const textOf = study.fileStyle === 'minutes' ? minutesText : secondsText
-  return study.sheet.map((sample, index) => ({ name: `${sample.name}.csv`, text: textOf(tables[index]!) }))
+  return study.sheet.map((sample, index) => ({ name: fileNameOf(sample.name), text: textOf(tables[index]!) }))
 }
 
 /** Comma and decimal point, minutes. */
@@ -36,7 +38,7 @@ function wideText(names: string[], tables: readonly SimulatedTable[]): string {
   }))
   const mean = (values: number[]) => values.reduce((sum, value) => sum + value, 0) / values.length
   const rows = [...cells.values()].map(({ mz, minutes, areas }) => ({ mz: mean(mz), minutes: mean(minutes), areas })).sort((a, b) => a.mz - b.mz || a.minutes - b.minutes)
-  return text(['m/z', 'RT (min)', ...names].join(','), rows.map(row => [row.mz.toFixed(4), row.minutes.toFixed(3), ...row.areas].join(',')))
+  return text(['m/z', 'RT (min)', ...names.map(name => `${name} Area`)].join(','), rows.map(row => [row.mz.toFixed(4), row.minutes.toFixed(3), ...row.areas].join(',')))
 }
 
 const text = (header: string, rows: string[]) => `${header}\n${rows.join('\n')}\n`

@@ -1,4 +1,4 @@
-import { exportFiles, type DemoFile } from './exportFiles'
+import { exportFiles, fileNameOf, type DemoFile } from './exportFiles'
 import { sheetCsv } from './sheetCsv'
 import { demoStudies } from './studies'
 
@@ -19,12 +19,17 @@ Standard-1 and -2     a mixture of standards
 Each file is one injection in negative mode: m/z, retention time in minutes, peak area.
 `
 
+const [study] = demoStudies
+const SHEET_NAME = 'sample-sheet.csv'
+
 /** What lies in public/demo: the first study's tables, its sample sheet and a word on both. */
 export function publicDemoFiles(): DemoFile[] {
-  const [study] = demoStudies
   return [
     ...exportFiles(study),
-    { name: 'sample-sheet.csv', text: sheetCsv(study.sheet) },
+    { name: SHEET_NAME, text: sheetCsv(study.sheet) },
     { name: 'README.txt', text: README },
   ]
 }
+
+/** Names of the files to upload, without the README: the sample sheet first. */
+export const publicFileNames: string[] = [SHEET_NAME, ...study.sheet.map(sample => fileNameOf(sample.name))]

@@ -1,6 +1,8 @@
+import type { FlagKind } from '../../../shared/schemas/flag'
 import type { MethodInput } from '../../../shared/schemas/method'
 import type { SampleInput } from '../../../shared/schemas/sample'
 import type { StudyInput } from '../../../shared/schemas/study'
+import type { LayoutAnswers } from '../../../shared/science/table/layout'
 import { negativeBackground } from './background'
 import { appleCompounds, peelCompounds, type DemoCompound } from './compounds'
 import { inventCompounds } from './invented'
@@ -19,6 +21,10 @@ export interface DemoStudy {
   /** How its tables are written: one file a sample in minutes or in seconds, or one wide file. */
   fileStyle: 'minutes' | 'seconds' | 'wide'
   comparisonTitle: string
+  /** What the analyst answers where its files leave something open. */
+  answers: LayoutAnswers
+  /** What the scientist has flagged. */
+  flags: readonly { compound: string, kind: FlagKind, reason: string }[]
 }
 
 const juiceMethod: MethodInput = {
@@ -61,6 +67,13 @@ export const demoStudies: readonly [DemoStudy, DemoStudy, DemoStudy] = [
     compounds: juiceCompounds,
     fileStyle: 'minutes',
     comparisonTitle: 'Millrace against Tallow Lane',
+    answers: {},
+    flags: [
+      { compound: 'patulin', kind: 'askAgain', reason: 'm/z of patulin, but protocatechuic acid has the same and comes later. Mass alone cannot tell: run a standard.' },
+      { compound: '5-hydroxymethylfurfural', kind: 'oneSideOnly', reason: 'Fits 5-hydroxymethylfurfural, which forms on heating: expected of a carton.' },
+      { compound: 'phloridzin', kind: 'ofInterest', reason: 'Fits phloridzin, typical of apple; pressing keeps more of it.' },
+      { compound: 'dodecylbenzenesulfonic acid', kind: 'contaminant', reason: 'Washing-up soap: stands in every blank.' },
+    ],
   },
   {
     seed: 'juices later',
@@ -78,6 +91,10 @@ export const demoStudies: readonly [DemoStudy, DemoStudy, DemoStudy] = [
     compounds: laterBatch(juiceCompounds, seededRandom('juices later batch')),
     fileStyle: 'seconds',
     comparisonTitle: 'One bottle against one carton',
+    answers: { massKind: 'mz' },
+    flags: [
+      { compound: '5-hydroxymethylfurfural', kind: 'oneSideOnly', reason: 'In the new batch too.' },
+    ],
   },
   {
     seed: 'peels',
@@ -98,5 +115,10 @@ export const demoStudies: readonly [DemoStudy, DemoStudy, DemoStudy] = [
     ],
     fileStyle: 'wide',
     comparisonTitle: 'Grove against market stall',
+    answers: { shape: 'wide' },
+    flags: [
+      { compound: 'thiabendazole', kind: 'contaminant', reason: 'Fits thiabendazole, used on fruit after harvest. By mass alone: needs a standard.' },
+      { compound: 'carbendazim', kind: 'contaminant', reason: 'Fits carbendazim, a fungicide. By mass alone: needs a standard.' },
+    ],
   },
 ]

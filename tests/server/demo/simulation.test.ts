@@ -5,7 +5,7 @@ import { appleCompounds, peelCompounds } from '../../../server/domain/demo/compo
 import { exportFiles } from '../../../server/domain/demo/exportFiles'
 import { simulateStudy } from '../../../server/domain/demo/injections'
 import { ionsOf } from '../../../server/domain/demo/ions'
-import { publicDemoFiles } from '../../../server/domain/demo/publicFiles'
+import { publicDemoFiles, publicFileNames } from '../../../server/domain/demo/publicFiles'
 import { demoStudies } from '../../../server/domain/demo/studies'
 import { monoisotopicMass } from '../../../shared/science/mass/formula'
 import { judgeDemoStudy } from '../../support/judgeDemoStudy'
@@ -21,6 +21,7 @@ describe('the demo laboratory\'s simulation', () => {
     const files = publicDemoFiles()
     expect(files).toEqual(publicDemoFiles())
     expect(readdirSync(folder).sort()).toEqual(files.map(file => file.name).sort())
+    expect([...publicFileNames, 'README.txt'].sort()).toEqual(files.map(file => file.name).sort())
     for (const { name, text } of files) expect(readFileSync(folder + name, 'utf8') === text, `${name}: run scripts/writeDemoFiles.ts`).toBe(true)
     expect(files.reduce((bytes, { text }) => bytes + Buffer.byteLength(text), 0)).toBeLessThan(2_000_000)
   })
@@ -67,7 +68,7 @@ describe('the demo laboratory\'s simulation', () => {
 
   it('writes study 2 in seconds and study 3 as one wide file', () => {
     expect(exportFiles(later).map(file => file.text.split('\n')[0])).toEqual(['Peak;Mass;RT [s];Area', 'Peak;Mass;RT [s];Area', 'Peak;Mass;RT [s];Area'])
-    expect(exportFiles(peels).map(file => file.text.split('\n')[0])).toEqual([`m/z,RT (min),${peels.sheet.map(sample => sample.name).join(',')}`])
+    expect(exportFiles(peels).map(file => file.text.split('\n')[0])).toEqual([`m/z,RT (min),${peels.sheet.map(sample => `${sample.name} Area`).join(',')}`])
   })
 
   it('keeps every sheet within what a comparison takes: weighed in mg, factors within ×3', () => {

@@ -1,0 +1,10 @@
+/** How far the making of the demo laboratory is. */
+export interface DemoState {
+  making: boolean
+  /** What is being done, as a phrase. */
+  now: string
+  /** Why it ended before it was whole, as a sentence. */
+  problem: string | null
+  /** Names of the files under /demo/ to try an upload with. */
+  files: string[]
+}
