@@ -1,5 +1,5 @@
+import { writeSheet } from '../../../shared/formats/sampleSheet/writeSheet'
 import { exportFiles, fileNameOf, type DemoFile } from './exportFiles'
-import { sheetCsv } from './sheetCsv'
 import { demoStudies } from './studies'
 
 const README = `Files to try an upload with
@@ -26,7 +26,7 @@ const SHEET_NAME = 'sample-sheet.csv'
 export function publicDemoFiles(): DemoFile[] {
   return [
     ...exportFiles(study),
-    { name: SHEET_NAME, text: sheetCsv(study.sheet) },
+    { name: SHEET_NAME, text: writeSheet(study.sheet) },
     { name: 'README.txt', text: README },
   ]
 }

@@ -7,6 +7,9 @@ import { simulateStudy } from '../../../server/domain/demo/injections'
 import { ionsOf } from '../../../server/domain/demo/ions'
 import { publicDemoFiles, publicFileNames } from '../../../server/domain/demo/publicFiles'
 import { demoStudies } from '../../../server/domain/demo/studies'
+import { readSheetCsv } from '../../../shared/formats/sampleSheet/readBlock'
+import { readCell } from '../../../shared/formats/sampleSheet/readCell'
+import { sampleFields } from '../../../shared/schemas/sample'
 import { monoisotopicMass } from '../../../shared/science/mass/formula'
 import { judgeDemoStudy } from '../../support/judgeDemoStudy'
 
@@ -24,6 +27,15 @@ describe('the demo laboratory\'s simulation', () => {
     expect([...publicFileNames, 'README.txt'].sort()).toEqual(files.map(file => file.name).sort())
     for (const { name, text } of files) expect(readFileSync(folder + name, 'utf8') === text, `${name}: run scripts/writeDemoFiles.ts`).toBe(true)
     expect(files.reduce((bytes, { text }) => bytes + Buffer.byteLength(text), 0)).toBeLessThan(2_000_000)
+  })
+
+  it('writes a sample sheet that the sheet reads back', () => {
+    const csv = publicDemoFiles().find(file => file.name === 'sample-sheet.csv')?.text ?? ''
+    const rows = readSheetCsv(csv)?.rows.map(({ cells }) => Object.fromEntries(sampleFields.map((field) => {
+      const read = readCell(field, cells[field] ?? '', { sideAName: 'A', sideBName: 'B' })
+      return [field, 'value' in read ? read.value : read.sentence]
+    })))
+    expect(rows).toEqual(juices.sheet)
   })
 
   it('gives another sample other numbers', () => {
