@@ -1,5 +1,5 @@
 import { asc, eq } from 'drizzle-orm'
-import type { AlignmentSettings } from '../../../shared/science/alignment/settings'
+import { settingDifferences } from '../../../shared/science/alignment/settingDifferences'
 import type { Database } from '../../db/open'
 import { alignments, alignmentTables, samples, tables } from '../../db/schema'
 import type { AlignInput } from './alignInput'
@@ -16,21 +16,6 @@ export function alignmentDifferences(db: Database, earlierId: string, input: Ali
     ...tableDifferences(before, now),
   ]
   return found.length > 0 ? found : [`The same settings and tables as alignment ${earlier.number}.`]
-}
-
-const WORDS: Record<keyof AlignmentSettings, (value: never) => string> = {
-  alignMassPpm: (value: number) => `Mass tolerance ${value} ppm`,
-  massFloorDa: (value: number | null) => value === null ? 'Smallest mass tolerance follows the ppm' : `Smallest mass tolerance ${value} Da`,
-  retentionMinutes: (value: number) => `Time tolerance ${value} min`,
-  landmarkWindowMinutes: (value: number) => `Landmarks within ${value} min`,
-  correctOffset: (value: boolean) => `Mass offset ${value ? 'taken out' : 'left'}`,
-  correctDrift: (value: boolean) => `Retention drift ${value ? 'corrected' : 'left'}`,
-  referenceDigest: (value: string | null) => value === null ? 'Reference: the table with most features' : `Reference: table ${value.slice(0, 8)}`,
-}
-
-function settingDifferences(before: AlignmentSettings, now: AlignmentSettings): string[] {
-  return (Object.keys(WORDS) as (keyof AlignmentSettings)[]).filter(name => before[name] !== now[name])
-    .map(name => `${WORDS[name](now[name] as never)} (before: ${WORDS[name](before[name] as never).replace(/^[A-Z]/, letter => letter.toLowerCase())}).`)
 }
 
 interface NamedTable { sampleName: string, digest: string }

@@ -12,7 +12,7 @@ export function driftReason(correction: Correction, settings: AlignmentSettings)
 }
 
 function offsetSentence({ offsetPpm, offsetApplied, landmarks, borrowedFrom }: Correction, settings: AlignmentSettings): string {
-  const size = `${offsetPpm.toFixed(1)} ppm`
+  const size = `${signedPpm(offsetPpm)} ppm`
   if (landmarks < fewestForOffset) {
     return borrowedFrom !== null && offsetApplied
       ? `With ${counted(landmarks)} to the reference the mass offset could not be judged; the neighbour's ${size} was taken out.`
@@ -33,6 +33,12 @@ function timeSentence({ source, landmarks, shareNear, refinedOn }: Correction, s
     case 'scattered': return `Times were not corrected: only ${Math.round(shareNear * 100)} % of ${counted(landmarks)} lie within ${settings.retentionMinutes} min of a smooth curve, and half must.`
     default: return 'Times were not corrected: drift correction is switched off.'
   }
+}
+
+/** With a true minus, and never −0. */
+function signedPpm(value: number): string {
+  const text = Math.abs(value).toFixed(1)
+  return value < 0 && Number(text) !== 0 ? `−${text}` : text
 }
 
 function counted(landmarks: number): string {

@@ -14,8 +14,3 @@ export const massFloorDa = (ppm: number): number => ppm * 1e-6 * floorBelowMz
 export function massToleranceDa(mz: number, ppm: number, floorDa: number | null = null): number {
   return Math.max(ppm * 1e-6 * mz, floorDa ?? massFloorDa(ppm))
 }
-
-/** Signed mass error in ppm, (measured − theoretical) / theoretical × 10⁶ (Brenton & Godfrey 2010). */
-export function massErrorPpm(measuredMz: number, theoreticalMz: number): number {
-  return (measuredMz - theoreticalMz) / theoreticalMz * 1e6
-}

@@ -1,5 +1,6 @@
 import { describe, expect, it } from 'vitest'
-import { massErrorPpm, massToleranceDa } from '../../../shared/science/mass/tolerance'
+import { massErrorPpm } from '../../../shared/science/mass/massError'
+import { massToleranceDa } from '../../../shared/science/mass/tolerance'
 
 describe('massToleranceDa', () => {
   it('is relative above m/z 200 and its floor below: 5 ppm and 0.001 Da (EU 2021/808)', () => {
