@@ -1,0 +1,29 @@
+import { signedLog2, threeDigits } from '#shared/science/verdict/numberWords'
+import { NO_NUMBER } from '~/utils/formatMeasures'
+
+/** Below this a probability rests on the tail of a curve that nobody has measured. */
+const SMALLEST_PROBABILITY = 1e-15
+
+/** p or q with two significant digits; never 0. */
+export function formatProbability(p: number): string {
+  if (!Number.isFinite(p)) return NO_NUMBER
+  if (p < SMALLEST_PROBABILITY) return '< 1e-15'
+  return p >= 0.001 ? Number(p.toPrecision(2)).toString() : p.toExponential(1)
+}
+
+/** A ratio of two intensities: ×3.2. */
+export function formatTimes(ratio: number): string {
+  return Number.isFinite(ratio) ? `×${ratio >= 100 ? threeDigits(ratio) : Number(ratio.toPrecision(ratio >= 10 ? 3 : 2))}` : NO_NUMBER
+}
+
+/** log2 ratio with its sign and two decimals: +1.68. */
+export function formatLog2(log2Ratio: number): string {
+  return Number.isFinite(log2Ratio) ? signedLog2(log2Ratio) : NO_NUMBER
+}
+
+/** A log2 ratio of B over A as the ratio of the greater to the smaller side: "×3.2 in B"; "×1.0" where equal. */
+export function formatFold(log2Ratio: number, names: { a: string, b: string }): string {
+  if (!Number.isFinite(log2Ratio)) return NO_NUMBER
+  const times = formatTimes(2 ** Math.abs(log2Ratio))
+  return times === '×1' ? 'equal' : `${times} in ${log2Ratio < 0 ? names.a : names.b}`
+}
