@@ -1,0 +1,43 @@
+import type { ComparisonData } from '#shared/formats/comparisonData'
+import { chooseSamples } from '#shared/science/verdict/chooseSamples'
+import type { ComparedSample, ComparisonSettings } from '#shared/science/verdict/settings'
+
+/** Which row of the drawing a sample stands in. */
+export type SampleGroup = 'A' | 'B' | 'blank' | 'pooledQc' | 'standard' | 'notCompared'
+
+export interface SampleValue {
+  name: string
+  preparation: string
+  group: SampleGroup
+  /** Intensity as the table states it; NaN: not detected. */
+  counts: number
+  /** Normalised as the comparison does; blanks, pooled QCs and standards as injected. */
+  value: number
+  /** The lowest the sample could have shown, normalised likewise; NaN where it is not known. */
+  floor: number
+}
+
+const ORDER: readonly SampleGroup[] = ['A', 'B', 'blank', 'pooledQc', 'standard', 'notCompared']
+
+function groupOf({ kind, side }: Pick<ComparedSample, 'kind' | 'side'>): SampleGroup {
+  if (kind === 'sample') return side ?? 'notCompared'
+  return kind === 'pooledQc' || kind === 'standard' ? kind : 'blank'
+}
+
+/** Factor of each sample to normalised counts, as the comparison has it; 1 for what is not compared. */
+export function displayFactors(samples: readonly ComparedSample[], settings: Pick<ComparisonSettings, 'normaliseByAmount'>): Float64Array {
+  return chooseSamples(samples, settings.normaliseByAmount).factor.map(factor => Number.isNaN(factor) ? 1 : factor)
+}
+
+/** One feature in every sample: side A, side B, then blanks, pooled QCs and standards. */
+export function sampleValues(data: Pick<ComparisonData, 'samples' | 'intensity'>, factors: Float64Array, settings: Pick<ComparisonSettings, 'intensityLimit'>, feature: number): SampleValue[] {
+  const values = data.samples.map((sample, s): SampleValue => {
+    const counts = data.intensity[s]?.[feature] ?? Number.NaN
+    const factor = factors[s] ?? 1
+    const floor = Number.isNaN(sample.floor) ? settings.intensityLimit ?? Number.NaN : Math.max(sample.floor, settings.intensityLimit ?? 0)
+    return { name: sample.name, preparation: sample.preparation || sample.name, group: groupOf(sample), counts, value: counts * factor, floor: floor * factor }
+  })
+  return values.map((value, place) => ({ value, place }))
+    .sort((one, other) => ORDER.indexOf(one.value.group) - ORDER.indexOf(other.value.group) || one.place - other.place)
+    .map(({ value }) => value)
+}

@@ -1,0 +1,25 @@
+import type { ComparisonData } from '#shared/formats/comparisonData'
+import type { VerdictResult } from '#shared/science/verdict/verdictResult'
+import type { ComparisonDetail } from '#shared/types/comparison'
+
+/** What the bench must know of the version it shows; a comparison of a study and a shared one both have it. */
+export type BenchVersion = Pick<ComparisonDetail['version'], 'number' | 'sideAName' | 'sideBName' | 'counts' | 'settings' | 'samples' | 'cautions' | 'engineVersion'>
+
+/**
+ * Where the bench gets what it shows. It knows no address of the server: the page of a study and the page of a share link
+ * each hand it their own.
+ */
+export interface BenchSource {
+  version: BenchVersion
+  loadVerdicts: () => Promise<VerdictResult>
+  /** The intensities, for values per sample and previews; null where they are not to be had. */
+  loadData: (() => Promise<ComparisonData>) | null
+}
+
+/** What the person may do here. */
+export interface BenchCapabilities {
+  /** Save a new version. */
+  save: boolean
+  /** Address of the verdicts as CSV; null: no export. */
+  csvAddress: string | null
+}
