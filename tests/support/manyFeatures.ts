@@ -2,23 +2,11 @@ import { decideVerdicts } from '../../shared/science/verdict/decideVerdicts'
 import { comparisonDefaults, type ComparedSample, type ComparisonSettings } from '../../shared/science/verdict/settings'
 import type { SideInput } from '../../shared/science/verdict/sideSummary'
 import { summariseSides } from '../../shared/science/verdict/summariseSides'
-
-/** A small generator with a seed, so that every run sees the same numbers (Mulberry32). */
-export function seededRandom(seed: number): () => number {
-  let state = seed >>> 0
-  return () => {
-    state = (state + 0x6D2B79F5) >>> 0
-    let t = state
-    t = Math.imul(t ^ (t >>> 15), t | 1)
-    t ^= t + Math.imul(t ^ (t >>> 7), t | 61)
-    return ((t ^ (t >>> 14)) >>> 0) / 2 ** 32
-  }
-}
+import { seededRandom } from './seededRandom'
 
 /** An aligned study of invented numbers: `perSide` preparations a side and two blanks; every kind of verdict occurs. */
 export function manyFeatures(features: number, { perSide = 3, seed = 7 } = {}): SideInput {
-  const random = seededRandom(seed)
-  const normal = () => Math.sqrt(-2 * Math.log(1 - random())) * Math.cos(2 * Math.PI * random())
+  const { uniform: random, normal } = seededRandom(seed)
   const sample = (name: string, rest: Partial<ComparedSample>): ComparedSample => ({
     id: name, name, kind: 'sample', side: null, preparation: name, amount: 100, amountUnit: 'mg', volumeMl: 1, dilution: 1, injectionUl: 2,
     runOrder: null, batch: null, floor: 2000, floorSource: 'stated', gapFilled: false, measure: 'area', ...rest,
