@@ -14,33 +14,35 @@ export interface FoldOptionInput {
   palette: Palette
   /** What the mark of a feature says under the pointer; plain lines, escaped here. */
   hint: (feature: number) => string[]
+  /** Little room: narrow lanes without marks of their own. */
+  narrow: boolean
   /** The part of the plot of ratios that is shown; null: all of it. */
   zoom: { x: [number, number], y: [number, number] } | null
 }
 
-const LANE_WIDTH = 64
+/** CSS pixels: of a lane, of what stands beside it, and of the axis of ratios. */
+const WIDE = { lane: 64, edge: 40, axis: 48 }
+const NARROW = { lane: 26, edge: 4, axis: 30 }
 const TOP = 28
 const BOTTOM = 44
-/** CSS pixels from the chart's left edge to each grid. */
-const RATIOS_LEFT = LANE_WIDTH + 84
 
 /** Fold-change plot: ratios in the middle, on each side a lane with what only that side shows, at its reach. */
-export function foldOption({ points, series, settings, names, palette, hint, zoom }: FoldOptionInput): EChartsOption {
+export function foldOption({ points, series, settings, names, palette, hint, narrow, zoom }: FoldOptionInput): EChartsOption {
   const text = { fontFamily: fonts.text, color: palette.muted, fontSize: 12 }
-  const widest = Math.ceil(Math.max(points.widest, 2 * settings.foldLimit, 1) * 1.04)
+  const ratios = ratioRange(Math.max(points.widest, 2 * settings.foldLimit, 1), narrow)
   const reach = reachRange(points, settings.reachLimit)
   return {
     animation: false,
     aria: { enabled: false },
     textStyle: text,
-    grid: grids(palette),
+    grid: grids(palette, narrow),
     xAxis: [
-      { ...axis(palette), type: 'value', gridIndex: 0, min: zoom?.x[0] ?? -widest, max: zoom?.x[1] ?? widest, name: `log2 ratio, ${names.b} over ${names.a}`, nameLocation: 'middle', nameGap: 26, nameTextStyle: text, axisLabel: { ...text, formatter: (value: number) => Number(value.toFixed(2)).toString().replace('-', '−') } },
+      { ...axis(palette), type: 'value', gridIndex: 0, ...(zoom ? { min: zoom.x[0], max: zoom.x[1] } : ratios), name: `log2 ratio, ${names.b} over ${names.a}`, nameLocation: 'middle', nameGap: 26, nameTextStyle: text, axisLabel: { ...text, formatter: (value: number) => Number(value.toFixed(2)).toString().replace('-', '−') } },
       ...[1, 2].map((gridIndex): XAXisComponentOption => ({ ...axis(palette), type: 'value', gridIndex, scale: true, axisLabel: { show: false }, axisTick: { show: false }, splitLine: { show: false }, name: `only ${gridIndex === 1 ? 'A' : 'B'}`, nameLocation: 'middle', nameGap: 8, nameTextStyle: { ...text, color: gridIndex === 1 ? palette.sideA : palette.sideB } })),
     ],
     yAxis: [
       { ...ratioAxis(points, palette), ...(zoom ? { min: zoom.y[0], max: zoom.y[1] } : {}) },
-      ...[1, 2].map((gridIndex): YAXisComponentOption => ({ ...axis(palette), type: 'value', gridIndex, min: reach[0], max: reach[1], interval: 1, position: gridIndex === 1 ? 'left' : 'right', splitLine: { show: false }, axisLabel: { ...text, formatter: reachLabel }, name: 'reach', nameTextStyle: text, nameGap: 10 })),
+      ...[1, 2].map((gridIndex): YAXisComponentOption => ({ ...axis(palette), type: 'value', gridIndex, min: reach[0], max: reach[1], interval: 1, position: gridIndex === 1 ? 'left' : 'right', splitLine: { show: false }, axisLabel: { ...text, show: !narrow, formatter: reachLabel }, axisTick: { show: !narrow }, name: 'reach', nameTextStyle: text, nameGap: 10 })),
     ],
     tooltip: {
       trigger: 'item', confine: true, transitionDuration: 0, backgroundColor: palette.panel, borderColor: palette.muted, textStyle: { ...text, color: palette.ink, fontSize: 13 }, extraCssText: 'box-shadow:none',
@@ -54,13 +56,21 @@ export function foldOption({ points, series, settings, names, palette, hint, zoo
   }
 }
 
-function grids(palette: Palette): GridComponentOption[] {
+function grids(palette: Palette, narrow: boolean): GridComponentOption[] {
   const common = { top: TOP, bottom: BOTTOM, show: true, backgroundColor: 'transparent', borderColor: palette.hairline, borderWidth: 1 }
+  const { lane, edge, axis: room } = narrow ? NARROW : WIDE
   return [
-    { ...common, left: RATIOS_LEFT, right: RATIOS_LEFT - 32 },
-    { ...common, left: 36, width: LANE_WIDTH },
-    { ...common, right: 36, width: LANE_WIDTH },
+    { ...common, left: edge + lane + room, right: edge + lane + 16 },
+    { ...common, left: edge, width: lane },
+    { ...common, right: edge, width: lane },
   ]
+}
+
+/** An even range around 0 whose ends are marks of the axis. */
+function ratioRange(reached: number, narrow: boolean): { min: number, max: number, interval: number } {
+  const steps = narrow ? 2 : 4
+  const interval = [0.5, 1, 2, 3, 4, 5].find(each => each * steps >= reached * 1.02) ?? Math.ceil(reached / steps)
+  return { min: -interval * steps, max: interval * steps, interval }
 }
 
 function axis(palette: Palette) {

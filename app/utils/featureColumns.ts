@@ -25,18 +25,18 @@ export function featureColumns({ columns, preparationsA, preparationsB }: Verdic
   const number = (id: SortKey, label: string, track: string, cell: FeatureColumn['cell'], full?: FeatureColumn['full']): FeatureColumn => ({ id, label, track, isNumber: true, sort: id, cell, full })
   const exact = (values: Float64Array) => (i: number) => Number.isFinite(values[i]) ? String(values[i]) : ''
   return [
-    number('number', '#', '4.5rem', i => String(i + 1)),
-    number('mz', 'm/z', '6.5rem', i => formatMz(columns.mz[i]!), exact(columns.mz)),
-    number('minutes', 'min', '4.5rem', i => formatMinutes(columns.retentionMinutes[i]!), exact(columns.retentionMinutes)),
-    { id: 'verdict', label: 'Verdict', track: 'minmax(13rem,1fr)', isNumber: false, sort: 'verdict', cell: i => verdictPhrase(columns.verdict[i] ?? 0, foldLimit, names, { reason: columns.reason[i]!, atLeast: columns.atLeast[i]! }) },
-    number('ratio', 'log2 B/A', '6rem', i => formatLog2(columns.log2Ratio[i]!), i => Number.isFinite(columns.log2Ratio[i]) ? `${formatFold(columns.log2Ratio[i]!, names)}; ${columns.log2Ratio[i]}` : ''),
-    number('q', 'q', '6rem', i => columns.method[i] === METHOD.assumed ? 'assumed' : formatProbability(columns.q[i]!), exact(columns.q)),
-    number('reach', 'reach', '5.5rem', i => formatTimes(columns.reach[i]!), exact(columns.reach)),
-    number('levelA', 'level A', '7rem', i => formatIntensity(columns.levelA[i]!), exact(columns.levelA)),
-    number('levelB', 'level B', '7rem', i => formatIntensity(columns.levelB[i]!), exact(columns.levelB)),
-    number('foundA', 'in A', '4.5rem', i => `${columns.detectedA[i]}/${preparationsA}`),
-    number('foundB', 'in B', '4.5rem', i => `${columns.detectedB[i]}/${preparationsB}`),
-    number('intensity', 'highest', '7rem', i => formatIntensity(columns.highestCounts[i]!), exact(columns.highestCounts)),
+    number('number', '#', '4rem', i => String(i + 1)),
+    number('mz', 'm/z', '6rem', i => formatMz(columns.mz[i]!), exact(columns.mz)),
+    number('minutes', 'min', '4rem', i => formatMinutes(columns.retentionMinutes[i]!), exact(columns.retentionMinutes)),
+    { id: 'verdict', label: 'Verdict', track: 'minmax(14rem,1.2fr)', isNumber: false, sort: 'verdict', cell: i => verdictPhrase(columns.verdict[i] ?? 0, foldLimit, names, { reason: columns.reason[i]!, atLeast: columns.atLeast[i]! }) },
+    number('ratio', 'log2 B/A', '5rem', i => formatLog2(columns.log2Ratio[i]!), i => Number.isFinite(columns.log2Ratio[i]) ? `${formatFold(columns.log2Ratio[i]!, names)}; ${columns.log2Ratio[i]}` : ''),
+    number('q', 'q', '5.5rem', i => columns.method[i] === METHOD.assumed ? 'assumed' : formatProbability(columns.q[i]!), exact(columns.q)),
+    number('reach', 'reach', '5rem', i => formatTimes(columns.reach[i]!), exact(columns.reach)),
+    number('levelA', 'level A', '7.5rem', i => formatIntensity(columns.levelA[i]!), exact(columns.levelA)),
+    number('levelB', 'level B', '7.5rem', i => formatIntensity(columns.levelB[i]!), exact(columns.levelB)),
+    number('foundA', 'in A', '3.5rem', i => `${columns.detectedA[i]}/${preparationsA}`),
+    number('foundB', 'in B', '3.5rem', i => `${columns.detectedB[i]}/${preparationsB}`),
+    number('intensity', 'highest', '7.5rem', i => formatIntensity(columns.highestCounts[i]!), exact(columns.highestCounts)),
     { id: 'reason', label: 'Reason', track: 'minmax(14rem,1fr)', isNumber: false, sort: null, cell: i => REASON_LABELS[REASONS[columns.reason[i] ?? 0] ?? 'inNeither'] },
   ]
 }

@@ -8,7 +8,7 @@ const SMALLEST_PROBABILITY = 1e-15
 export function formatProbability(p: number): string {
   if (!Number.isFinite(p)) return NO_NUMBER
   if (p < SMALLEST_PROBABILITY) return '< 1e-15'
-  return p >= 0.001 ? Number(p.toPrecision(2)).toString() : p.toExponential(1)
+  return p >= 0.001 ? p.toPrecision(2) : p.toExponential(1)
 }
 
 /** A ratio of two intensities: ×3.2. */

@@ -9,7 +9,7 @@ import type { TableLayout } from '../../shared/science/table/layout'
 /** One sample of a test alignment and its table: intensity per feature, NaN = not detected; rows are in the order of features. */
 export interface TestColumn extends Partial<SampleInput> {
   name: string
-  intensity: readonly number[]
+  intensity: ArrayLike<number>
   statedFloor?: number | null
   emptyShare?: number
   /** An existing sample and table to use again. */
@@ -21,12 +21,12 @@ const noNumbers = packFloat64(new Float64Array(0))
 let made = 0
 
 /** Samples, tables and an alignment of them, features at m/z 200, 201 … and minutes 1, 2 …; for tests of comparisons. */
-export function addComparedAlignment({ db }: Pick<OpenDatabase, 'db'>, studyId: string, createdBy: string, columns: readonly TestColumn[], { practice = false } = {}) {
+export function addComparedAlignment({ db }: Pick<OpenDatabase, 'db'>, studyId: string, createdBy: string, columns: readonly TestColumn[], { practice = false, mz, retentionMinutes }: { practice?: boolean, mz?: Float64Array, retentionMinutes?: Float64Array } = {}) {
   const features = columns[0]?.intensity.length ?? 0
   const alignment = db.insert(alignments).values({
     studyId, createdBy, practice, groups: features, number: ++made, settings: alignmentDefaults, engineVersion: 'test', reference: 0,
-    mz: packFloat64(Float64Array.from({ length: features }, (_, i) => 200 + i)),
-    retentionMinutes: packFloat64(Float64Array.from({ length: features }, (_, i) => 1 + i)),
+    mz: packFloat64(mz ?? Float64Array.from({ length: features }, (_, i) => 200 + i)),
+    retentionMinutes: packFloat64(retentionMinutes ?? Float64Array.from({ length: features }, (_, i) => 1 + i)),
     groupSize: packInt32(new Int32Array(features)), neighbourStart: packInt32(new Int32Array(features + 1)), neighbourList: none,
   }).returning().get()
   const placed = columns.map((column, position) => {
@@ -56,5 +56,5 @@ function addTable({ db }: Pick<OpenDatabase, 'db'>, studyId: string, createdBy: 
     layout: {} as TableLayout, measure: 'area', massKind: 'mz', features: detected.length, mz: bytes, retentionMinutes: bytes, intensity: bytes, statedFloor, createdBy,
   }).returning().get()
   let row = 0
-  return { sampleId: sample.id, tableId: table.id, digest, member: [...intensity].map(value => Number.isNaN(value) ? -1 : row++) }
+  return { sampleId: sample.id, tableId: table.id, digest, member: Array.from(intensity, value => Number.isNaN(value) ? -1 : row++) }
 }

@@ -27,7 +27,7 @@ describe('formats of measures', () => {
 })
 
 describe('formats of statistics', () => {
-  it.each([[0, '< 1e-15'], [9.9e-16, '< 1e-15'], [3.24e-7, '3.2e-7'], [0.0123, '0.012'], [0.5, '0.5'], [1, '1']])('writes probability %d as %s', (p, text) => {
+  it.each([[0, '< 1e-15'], [9.9e-16, '< 1e-15'], [3.24e-7, '3.2e-7'], [0.0123, '0.012'], [0.06, '0.060'], [0.5, '0.50'], [1, '1.0']])('writes probability %d as %s', (p, text) => {
     expect(formatProbability(p)).toBe(text)
   })
 

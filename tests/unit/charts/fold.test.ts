@@ -83,7 +83,7 @@ describe('series of the fold-change plot', () => {
 })
 
 describe('option of the fold-change plot', () => {
-  const option = foldOption({ points, series, settings: many.settings, names, palette: light, hint: i => [`feature ${i}`, '<b>'], zoom: null })
+  const option = foldOption({ points, series, settings: many.settings, names, palette: light, hint: i => [`feature ${i}`, '<b>'], narrow: false, zoom: null })
 
   it('leans A to the left and B to the right of an even middle', () => {
     const [ratios] = option.xAxis as { min: number, max: number }[]
@@ -104,7 +104,7 @@ describe('option of the fold-change plot', () => {
   })
 
   it('shows the part it is zoomed to', () => {
-    const zoomed = foldOption({ points, series, settings: many.settings, names, palette: light, hint: () => [], zoom: { x: [1, 2], y: [3, 4] } })
+    const zoomed = foldOption({ points, series, settings: many.settings, names, palette: light, hint: () => [], narrow: false, zoom: { x: [1, 2], y: [3, 4] } })
     expect((zoomed.xAxis as { min: number }[])[0]?.min).toBe(1)
     expect((zoomed.yAxis as { max: number }[])[0]?.max).toBe(4)
   })
