@@ -1,17 +1,17 @@
 import type { FlagInput } from '#shared/schemas/flag'
-import type { FlagLine } from '#shared/types/flag'
+import type { AlignmentFlags, FlagLine } from '#shared/types/flag'
 
 interface FlagAct { sentence: string, flagIds: string[], takenBack: boolean }
 
 /** The flags of one alignment, shared by all who ask on a page: setting, taking back, and undoing the last act. */
 export function useFlags(studyId: string, alignmentId: string) {
   const url = `/api/studies/${studyId}/alignments/${alignmentId}/flags`
-  const { data, refresh } = useFetch<FlagLine[]>(url, { key: `flags-${alignmentId}`, default: () => [] })
+  const { data, refresh } = useFetch<AlignmentFlags>(url, { key: `flags-${alignmentId}`, default: () => ({ flags: [], mayFlag: false }) })
   const lastAct = useState<FlagAct | null>(`flag-act-${alignmentId}`, () => null)
 
   const byFeature = computed(() => {
     const map = new Map<number, FlagLine[]>()
-    for (const flag of data.value) map.set(flag.featureIndex, [...map.get(flag.featureIndex) ?? [], flag])
+    for (const flag of data.value.flags) map.set(flag.featureIndex, [...map.get(flag.featureIndex) ?? [], flag])
     return map
   })
 
@@ -27,7 +27,7 @@ export function useFlags(studyId: string, alignmentId: string) {
     lastAct.value = { sentence: countOf(flagIds.length, takenBack ? 'taken back' : 'set again'), flagIds, takenBack }
   })
   const undo = () => lastAct.value && changing.submit(lastAct.value.flagIds, !lastAct.value.takenBack)
-  return { flags: data, byFeature, lastAct, adding, changing, undo }
+  return { mayFlag: computed(() => data.value.mayFlag), byFeature, lastAct, adding, changing, undo }
 }
 
 const countOf = (flags: number, what: string) => flags === 1 ? `Flag ${what}.` : `${flags} flags ${what}.`

@@ -12,6 +12,9 @@ export interface FlagLine {
   at: string
 }
 
+/** The flags that stand on an alignment, and whether the person who asks may set and take back. */
+export interface AlignmentFlags { flags: FlagLine[], mayFlag: boolean }
+
 /** A flagged feature in the list of a study. */
 export interface FlaggedFeature extends FlagLine {
   alignmentId: string
