@@ -19,7 +19,7 @@ export function useBenchAddress() {
   watch(() => textOf(route.query), (text) => {
     if (text !== ours) bench.show(queryToView(route.query))
   })
-  const stepped = () => JSON.stringify([bench.verdicts, bench.flaggedOnly, bench.sort])
+  const stepped = () => JSON.stringify([bench.verdicts, bench.flags, bench.sort])
   let before = stepped()
   const write = useDebounceFn(() => {
     const query = viewToQuery(bench.$state)

@@ -19,7 +19,7 @@ export function useFeatureRows(result: () => VerdictResult | null, names: () => 
     if (!columns) return none
     return filterFeatures(columns, order.value, {
       verdicts: [...bench.verdicts],
-      flagged: bench.flaggedOnly ? flagged() : null,
+      flagged: bench.flags !== 'all' ? flagged() : null,
       search: parseSearch(bench.find, bench.massPpm),
       said: i => verdictPhrase(columns.verdict[i] ?? 0, foldLimit(), names()),
     })

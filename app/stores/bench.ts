@@ -6,7 +6,7 @@ import type { Verdict } from '#shared/science/verdict/verdicts'
 export const useBenchStore = defineStore('bench', {
   state: (): BenchView => ({ ...benchDefaults, verdicts: [...benchDefaults.verdicts], sort: { ...benchDefaults.sort } }),
   getters: {
-    isFiltered: state => state.verdicts.length > 0 || state.flaggedOnly || state.find !== '',
+    isFiltered: state => state.verdicts.length > 0 || state.flags !== 'all' || state.find !== '',
   },
   actions: {
     show(view: BenchView) {
@@ -25,7 +25,7 @@ export const useBenchStore = defineStore('bench', {
     },
     clearFilter() {
       this.verdicts = []
-      this.flaggedOnly = false
+      this.flags = 'all'
       this.find = ''
     },
   },

@@ -12,11 +12,11 @@ export const flagKindNames: Record<FlagKind, string> = {
 }
 
 /** As many as one act may flag or take back. */
-const MOST_AT_ONCE = 1000
+export const FLAGS_AT_ONCE = 1000
 
 /** One flag, with one reason, on one feature or on many at once. */
 export const flagSchema = z.object({
-  featureIndexes: z.array(z.number().int().min(0)).min(1, 'Choose a feature.').max(MOST_AT_ONCE, `At most ${MOST_AT_ONCE} features at once.`),
+  featureIndexes: z.array(z.number().int().min(0)).min(1, 'Choose a feature.').max(FLAGS_AT_ONCE, `At most ${FLAGS_AT_ONCE} features at once.`),
   kind: z.enum(flagKinds, { error: 'Choose a kind of flag.' }),
   reason: requiredText(500),
 })
@@ -24,7 +24,7 @@ export type FlagInput = z.infer<typeof flagSchema>
 
 /** Taking flags back, or setting them again. */
 export const flagChangeSchema = z.object({
-  flagIds: z.array(idField).min(1, 'Choose a flag.').max(MOST_AT_ONCE),
+  flagIds: z.array(idField).min(1, 'Choose a flag.').max(FLAGS_AT_ONCE),
   takenBack: z.boolean(),
 })
 export type FlagChange = z.infer<typeof flagChangeSchema>
