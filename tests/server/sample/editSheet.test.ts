@@ -1,13 +1,15 @@
 import { eq } from 'drizzle-orm'
 import { afterAll, beforeAll, beforeEach, describe, expect, it } from 'vitest'
-import { activity, samples, studies } from '../../../server/db/schema'
+import { activity, samples, studies, tables } from '../../../server/db/schema'
 import type { Person } from '../../../server/domain/person/person'
 import { editSheet } from '../../../server/domain/sample/editSheet'
 import { readSheet } from '../../../server/domain/sample/readSheet'
 import { sampleFields, sampleSchema, type SampleField } from '../../../shared/schemas/sample'
 import { sheetChangesSchema, type CellValue } from '../../../shared/schemas/sheet'
 import type { SampleRow } from '../../../shared/types/sample'
+import { addComparedAlignment } from '../../support/comparedAlignment'
 import { addTestPerson, addTestStudy, openTestLaboratory, type TestLaboratory } from '../../support/laboratory'
+import { addTestTable } from '../../support/testTable'
 
 let laboratory: TestLaboratory
 let anna: Person
@@ -159,5 +161,20 @@ describe('deleted rows', () => {
     save({ removed: [seen] }, ben)
     expect(save({ removed: [seen] }, anna)).toMatchObject({ conflicts: [], refusals: [] })
     expect(laboratory.db.select().from(samples).where(eq(samples.studyId, studyId)).all()).toHaveLength(2)
+  })
+
+  it('leave their tables without a sample', () => {
+    const table = addTestTable(laboratory, studyId, anna.id, { mz: [200], minutes: [1], intensity: [1e5] }, { name: 'four' })
+    expect(row('four')).toMatchObject({ tables: 1, aligned: false })
+    save({ removed: [asSeen('four')] })
+    expect(laboratory.db.select({ sampleId: tables.sampleId }).from(tables).where(eq(tables.id, table.id)).get()).toEqual({ sampleId: null })
+  })
+
+  it('stay where an alignment holds them, with a sentence', () => {
+    addComparedAlignment(laboratory, studyId, anna.id, [{ name: 'aligned', intensity: [1e5] }])
+    expect(row('aligned')).toMatchObject({ tables: 1, aligned: true })
+    const saved = save({ removed: [asSeen('aligned'), asSeen('two')] })
+    expect(saved.refusals).toEqual([{ row: row('aligned').id, field: null, sentence: 'aligned stands in an alignment and can\'t be deleted. Take its side away to leave it out of new comparisons.' }])
+    expect(saved.samples.map(sample => sample.name).sort()).toEqual(['aligned', 'one', 'three'])
   })
 })
