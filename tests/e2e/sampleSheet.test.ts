@@ -2,7 +2,7 @@ import { mkdtempSync, rmSync } from 'node:fs'
 import { tmpdir } from 'node:os'
 import { join } from 'node:path'
 import type { Browser, Locator, Page } from 'playwright-core'
-import { afterAll, beforeAll, describe, expect, it } from 'vitest'
+import { afterAll, afterEach, beforeAll, describe, expect, it } from 'vitest'
 import { openDatabase } from '../../server/db/open'
 import { people } from '../../server/db/schema'
 import { makeStudy } from '../../server/domain/study/makeStudy'
@@ -34,6 +34,9 @@ beforeAll(async () => {
   server = await startBuiltServer({ folder, env: { NUXT_SESSION_COOKIE_SECURE: 'false' } })
   browser = await launchBrowser()
 })
+afterEach(async () => {
+  await Promise.all(open.splice(0).map(watched => watched.close()))
+})
 afterAll(async () => {
   await browser?.close()
   await server?.stop()
@@ -55,11 +58,12 @@ async function atSheet(person: 0 | 1): Promise<WatchedPage> {
 }
 const column = { name: 0, side: 2, amount: 4, batch: 10 }
 const cell = (page: Page, row: number, field: keyof typeof column): Locator => page.locator(`[data-place="${row}-${column[field]}"]`)
-const paste = (page: Page, text: string) => page.evaluate((content) => {
+/** Runs in the page, as the browser does it on Control+V. */
+const paste = (page: Page, text: string) => page.evaluate(`{
   const data = new DataTransfer()
-  data.setData('text/plain', content)
-  document.activeElement?.dispatchEvent(new ClipboardEvent('paste', { clipboardData: data, bubbles: true, cancelable: true }))
-}, text)
+  data.setData('text/plain', ${JSON.stringify(text)})
+  document.activeElement.dispatchEvent(new ClipboardEvent('paste', { clipboardData: data, bubbles: true, cancelable: true }))
+}`)
 async function write(page: Page, row: number, field: keyof typeof column, text: string) {
   await cell(page, row, field).click()
   await page.keyboard.type(text)
@@ -106,8 +110,8 @@ describe('the sample sheet', () => {
     await anna.page.getByRole('button', { name: 'Keep mine' }).click()
     await says(anna.page, 'Saved')
     // Who comes back to the page sees what others saved.
-    await ben.page.evaluate(() => window.dispatchEvent(new Event('focus')))
-    await ben.page.waitForFunction(place => document.querySelector(place)?.textContent?.trim() === '30', `[data-place="0-${column.amount}"]`)
+    await ben.page.evaluate('void window.dispatchEvent(new Event("focus"))')
+    await cell(ben.page, 0, 'amount').filter({ hasText: '30' }).waitFor()
     expect([...anna.problems(), ...ben.problems()]).toEqual([])
   })
 
