@@ -18,7 +18,13 @@ export default defineNuxtConfig({
   modules: ['@nuxt/eslint', '@nuxtjs/tailwindcss', '@pinia/nuxt', 'nuxt-auth-utils', 'nuxt-security'],
   components: [{ path: '~/components', pathPrefix: false }],
   app: {
-    head: { htmlAttrs: { lang: 'en' }, titleTemplate: '%s · Steelyard', link: [{ rel: 'icon', type: 'image/svg+xml', href: '/icon.svg' }] },
+    head: {
+      htmlAttrs: { lang: 'en' },
+      titleTemplate: '%s · Steelyard',
+      link: [{ rel: 'icon', type: 'image/svg+xml', href: '/icon.svg' }],
+      // zod would try eval once to see whether it may, and the content policy reports that; this tells it before.
+      script: [{ innerHTML: 'globalThis.__zod_globalConfig = { jitless: true }' }],
+    },
   },
   css: ['~/assets/fonts.css'],
   compatibilityDate: '2026-11-01',

@@ -20,3 +20,11 @@ export async function useMe() {
     refresh,
   }
 }
+
+/** Asks again who is signed in, after an act that changed it. Nuxt's own refreshing by key waits until the browser is idle, which may be never. */
+export function useRefreshMe() {
+  const { data } = useNuxtData<Me>('me')
+  return async () => {
+    data.value = await $fetch<Me>('/api/me')
+  }
+}
