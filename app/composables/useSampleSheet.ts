@@ -4,6 +4,7 @@ import { sampleFields, sampleSchema, type SampleField } from '#shared/schemas/sa
 import type { SampleRow } from '#shared/types/sample'
 import { addRows, clearTyped, forget, keyOf, setTyped, type SheetDraft } from '~/utils/sampleSheet/draft'
 import type { CellText } from '~/utils/sampleSheet/placeBlock'
+import { reuseRows } from '~/utils/sampleSheet/reuseRows'
 import { addAgain, letGo } from '~/utils/sampleSheet/settle'
 import { sheetRows, type RowView } from '~/utils/sampleSheet/sheetRows'
 
@@ -11,7 +12,7 @@ const UNDO_STEPS = 100
 
 /** The sheet as one person edits it: rows as they see them, and every way to change them. `base` is what stands on the server. */
 export function useSampleSheet(base: Ref<SampleRow[]>, draft: SheetDraft, names: Ref<{ sideAName: string, sideBName: string }>) {
-  const rows = computed(() => sheetRows(base.value, draft, names.value))
+  const rows = computed<RowView[]>(before => reuseRows(before ?? [], sheetRows(base.value, draft, names.value)))
   const byKey = computed(() => new Map(rows.value.map(row => [row.key, row])))
   const standing = computed(() => new Map(base.value.map(row => [keyOf(draft, row.id), row])))
   const undoSteps: CellText[][] = []

@@ -126,6 +126,20 @@ describe('editing', () => {
     expect(focused()).toBe('1-4')
   })
 
+  it('is not begun by a second click, but by a double click or a second tap', async () => {
+    const { focus, cell, grid, press } = await mounted()
+    await focus(1, 'amount')
+    await focus(1, 'amount')
+    await cell(1, 'amount').trigger('click', { pointerType: 'mouse' })
+    expect(grid.find('input').exists()).toBe(false)
+    await cell(1, 'amount').trigger('dblclick')
+    expect(grid.get<HTMLInputElement>('input').element.value).toBe('12.5')
+    await press('Escape')
+    await focus(1, 'amount')
+    await cell(1, 'amount').trigger('click', { pointerType: 'touch' })
+    expect(grid.find('input').exists()).toBe(true)
+  })
+
   it('keeps what was typed when the focus leaves', async () => {
     const { focus, press, type, text, grid } = await mounted()
     await focus(0, 'batch')

@@ -2,6 +2,7 @@ import { describe, expect, it } from 'vitest'
 import { addRows, emptyDraft, setTyped, type SheetDraft } from '../../../app/utils/sampleSheet/draft'
 import { needsOf } from '../../../app/utils/sampleSheet/needs'
 import { pendingChanges, type PendingChanges } from '../../../app/utils/sampleSheet/pendingChanges'
+import { reuseRows } from '../../../app/utils/sampleSheet/reuseRows'
 import { addAgain, letGo, settleFresh, settleSaved } from '../../../app/utils/sampleSheet/settle'
 import { sheetRows, type RowView } from '../../../app/utils/sampleSheet/sheetRows'
 import { sampleSchema, type SampleField } from '../../../shared/schemas/sample'
@@ -75,6 +76,18 @@ describe('what is sent', () => {
     type(draft, one, 'name', 'two')
     type(draft, two, 'name', 'one')
     expect(sent(sheetRows([one, two], draft, names), draft).changes.edits).toHaveLength(2)
+  })
+})
+
+describe('rows seen again', () => {
+  it('are the same objects where nothing about them changed', () => {
+    const draft = emptyDraft()
+    const before = sheetRows([one, two], draft, names)
+    type(draft, two, 'batch', 'b')
+    const after = reuseRows(before, sheetRows([one, two], draft, names))
+    expect(after[0]).toBe(before[0])
+    expect(after[1]).not.toBe(before[1])
+    expect(after).toEqual(sheetRows([one, two], draft, names))
   })
 })
 
