@@ -37,6 +37,8 @@ export default defineNuxtConfig({
   auth: { loadStrategy: 'none', hash: { scrypt: { cost: 2 ** 17, blockSize: 8, parallelization: 1, maxMemory: 192 * 2 ** 20 } } },
   tailwindcss: { viewer: false, cssPath: '~/assets/main.css' },
 
+  vite: { resolve: { alias: { '@stdlib/assert-has-generator-support': root('./app/policy/hasGeneratorSupport.cjs') } } },
+
   // Headers and nonce only: the module's other defaults refuse honest input (an "m/z < 200" looks like an attack to it).
   security: {
     rateLimiter: false,
