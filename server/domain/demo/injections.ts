@@ -5,10 +5,13 @@ import { seededRandom } from './seededRandom'
 import { DEMO_RUN_MINUTES, simulateTable, type Injection, type SimulatedTable } from './simulateTable'
 
 export interface SimulatedStudy {
+  /** Names the study's random numbers. */
   seed: string
   polarity: 'negative' | 'positive'
   sheet: readonly SampleInput[]
   compounds: readonly DemoCompound[]
+  /** Place in the run at which the mass scale was set right. */
+  calibratedAt: number
 }
 
 /** volumeMl × dilution / amount / injectionUl of the injection that levels are stated for. */
@@ -20,8 +23,7 @@ const COMPOUND_CV_PERCENT = 9
 const BACKGROUND_CV_PERCENT = 8
 const DRIFT_PER_INJECTION_MINUTES = 0.016
 const MIDDLE_OF_RUN = 8
-const CALIBRATION_LOST_AT = 9
-const CALIBRATION_LOST_PPM = 3.4
+const BEFORE_CALIBRATION_PPM = -3.4
 
 /** The tables of a study, in the order of its sheet. Each sample has random numbers of its own: a sample more changes no other. */
 export function simulateStudy(study: SimulatedStudy): SimulatedTable[] {
@@ -38,7 +40,7 @@ function injectionOf(study: SimulatedStudy, sample: SampleInput): Injection {
   return {
     polarity: study.polarity,
     contents: contentsOf(study, sample),
-    offsetPpm: random.normal(runOrder >= CALIBRATION_LOST_AT ? CALIBRATION_LOST_PPM : 0, 0.2),
+    offsetPpm: random.normal(runOrder < study.calibratedAt ? BEFORE_CALIBRATION_PPM : 0, 0.2),
     driftMinutes: minutes => late * (0.3 + 0.7 * minutes / DEMO_RUN_MINUTES) + wave * Math.sin(2 * Math.PI * minutes / DEMO_RUN_MINUTES + phase),
   }
 }

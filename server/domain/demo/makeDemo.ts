@@ -10,7 +10,7 @@ import { demoIsWanted, markDemoMade } from './demoProgress'
 import { flagDemoStory } from './flagDemoStory'
 import { sendDemoFiles } from './sendDemoFiles'
 import { startDemoStudy } from './startDemoStudy'
-import { demoStudies } from './studies'
+import { demoStudies, type DemoStudy } from './studies'
 
 export interface DemoPlace { db: Database, folder: string, jobs: Jobs }
 
@@ -27,6 +27,7 @@ export async function makeDemo(place: DemoPlace, tell: (now: string) => void, si
   const analyst = personWith(db, 'analyst')
   const scientist = personWith(db, 'scientist')
   if (!analyst || !scientist) return
+  const made: { study: DemoStudy, studyId: string, alignmentId: string }[] = []
   for (const [index, study] of demoStudies.entries()) {
     const now = (what: string) => tell(`${what} study ${index + 1} of ${demoStudies.length}, “${study.study.title}”`)
     now('Writing the sample sheet of')
@@ -37,8 +38,10 @@ export async function makeDemo(place: DemoPlace, tell: (now: string) => void, si
     const alignmentId = await alignDemoStudy(place, study, studyId, analyst, signal)
     now('Comparing the sides of')
     await compareDemoStudy(place, study, studyId, alignmentId, scientist, signal)
-    flagDemoStory(db, study, studyId, alignmentId, scientist)
+    made.unshift({ study, studyId, alignmentId })
   }
+  // The first study last: lists show what was changed last on top, and it is the one to begin with.
+  for (const { study, studyId, alignmentId } of made) flagDemoStory(db, study, studyId, alignmentId, scientist)
   markDemoMade(db)
 }
 

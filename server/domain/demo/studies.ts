@@ -1,23 +1,18 @@
 import type { FlagKind } from '../../../shared/schemas/flag'
 import type { MethodInput } from '../../../shared/schemas/method'
-import type { SampleInput } from '../../../shared/schemas/sample'
 import type { StudyInput } from '../../../shared/schemas/study'
 import type { LayoutAnswers } from '../../../shared/science/table/layout'
 import { negativeBackground } from './background'
 import { appleCompounds, peelCompounds, type DemoCompound } from './compounds'
+import type { SimulatedStudy } from './injections'
 import { inventCompounds } from './invented'
 import { laterBatch } from './laterBatch'
 import { seededRandom } from './seededRandom'
 import { juiceSheet, laterJuiceSheet, peelSheet } from './sheets'
 
-export interface DemoStudy {
-  /** Names the study's random numbers. */
-  seed: string
-  polarity: 'negative' | 'positive'
+export interface DemoStudy extends SimulatedStudy {
   method: MethodInput
   study: Omit<StudyInput, 'methodId'>
-  sheet: readonly SampleInput[]
-  compounds: readonly DemoCompound[]
   /** How its tables are written: one file a sample in minutes or in seconds, or one wide file. */
   fileStyle: 'minutes' | 'seconds' | 'wide'
   comparisonTitle: string
@@ -65,6 +60,7 @@ export const demoStudies: readonly [DemoStudy, DemoStudy, DemoStudy] = [
     },
     sheet: juiceSheet,
     compounds: juiceCompounds,
+    calibratedAt: 9,
     fileStyle: 'minutes',
     comparisonTitle: 'Millrace against Tallow Lane',
     answers: {},
@@ -89,6 +85,7 @@ export const demoStudies: readonly [DemoStudy, DemoStudy, DemoStudy] = [
     },
     sheet: laterJuiceSheet,
     compounds: laterBatch(juiceCompounds, seededRandom('juices later batch')),
+    calibratedAt: 1,
     fileStyle: 'seconds',
     comparisonTitle: 'One bottle against one carton',
     answers: { massKind: 'mz' },
@@ -113,6 +110,7 @@ export const demoStudies: readonly [DemoStudy, DemoStudy, DemoStudy] = [
       ...peelCompounds,
       ...inventCompounds({ level: 110, between: 24, moreA: 10, moreB: 12, onlyA: 3, onlyB: 5, solvent: 10, process: 10, aboveBlankInA: 2 }, seededRandom('peels invented'), 'positive'),
     ],
+    calibratedAt: 1,
     fileStyle: 'wide',
     comparisonTitle: 'Grove against market stall',
     answers: { shape: 'wide' },
