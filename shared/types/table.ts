@@ -45,6 +45,8 @@ export interface UploadLine {
   /** Why it was refused, or what was noticed, as a sentence. */
   remark: string | null
   jobId: string | null
+  /** How far the reading is, and what it does just now. */
+  progress: { share: number, message: string } | null
   /** The same for files that one answer settles. */
   fingerprint: string | null
   createdAt: string

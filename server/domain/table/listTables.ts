@@ -3,7 +3,7 @@ import { alias } from 'drizzle-orm/sqlite-core'
 import { GAP_FILLED_SHARE } from '../../../shared/schemas/table'
 import type { StudyTables, TableLine, UploadDetail } from '../../../shared/types/table'
 import type { Database } from '../../db/open'
-import { alignmentTables, originals, people, samples, tables, uploads } from '../../db/schema'
+import { alignmentTables, jobs, originals, people, samples, tables, uploads } from '../../db/schema'
 import { notFound } from '../DomainError'
 import { uploadLine } from './uploadLine'
 
@@ -27,8 +27,9 @@ export function listTables(db: Database, studyId: string): StudyTables {
     ...row, timeUnit: layout.timeUnit, gapFilled: emptyShare !== null && emptyShare < GAP_FILLED_SHARE, alignments: used.get(row.id) ?? 0,
     createdAt: row.createdAt.toISOString(), replacedAt: row.replacedAt?.toISOString() ?? null,
   }))
-  const open = db.select().from(uploads).where(and(eq(uploads.studyId, studyId), ne(uploads.status, 'read'))).orderBy(desc(uploads.createdAt)).all()
-  return { tables: lines, uploads: open.map(uploadLine), samples: db.select({ id: samples.id, name: samples.name }).from(samples).where(eq(samples.studyId, studyId)).orderBy(asc(samples.position)).all() }
+  const open = db.select({ upload: uploads, job: { progress: jobs.progress, message: jobs.message } }).from(uploads).leftJoin(jobs, eq(jobs.id, uploads.jobId))
+    .where(and(eq(uploads.studyId, studyId), ne(uploads.status, 'read'))).orderBy(desc(uploads.createdAt)).all()
+  return { tables: lines, uploads: open.map(row => uploadLine(row.upload, row.job)), samples: db.select({ id: samples.id, name: samples.name }).from(samples).where(eq(samples.studyId, studyId)).orderBy(asc(samples.position)).all() }
 }
 
 /** One upload with what its proposal is made from. */

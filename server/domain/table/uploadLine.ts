@@ -3,8 +3,8 @@ import type { uploads } from '../../db/schema'
 
 export type Upload = typeof uploads.$inferSelect
 
-/** An upload as pages see it. */
-export function uploadLine(row: Upload): UploadLine {
+/** An upload as pages see it, with its job while it is being read. */
+export function uploadLine(row: Upload, job: { progress: number, message: string } | null = null): UploadLine {
   const { id, fileName, bytes, status, remark, jobId, fingerprint, createdAt, expiresAt } = row
-  return { id, fileName, bytes, status, remark, jobId, fingerprint, createdAt: createdAt.toISOString(), expiresAt: expiresAt?.toISOString() ?? null }
+  return { id, fileName, bytes, status, remark, jobId, fingerprint, progress: status === 'reading' && job ? { share: job.progress, message: job.message } : null, createdAt: createdAt.toISOString(), expiresAt: expiresAt?.toISOString() ?? null }
 }
