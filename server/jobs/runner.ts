@@ -84,7 +84,7 @@ export class Jobs {
     if (!kind || !source) return this.end(job, 'failed', `This version does not know how to ${job.kind}.`)
     try {
       const { data, transfer } = kind.prepare(this.context, job.input, job)
-      const worker = new Worker(source, { eval: true, workerData: data, transferList: transfer, resourceLimits: { maxOldGenerationSizeMb: kind.heapMb } })
+      const worker = new Worker(source, { eval: true, workerData: data, transferList: transfer, resourceLimits: { maxOldGenerationSizeMb: kind.heapMb, maxYoungGenerationSizeMb: kind.youngHeapMb } })
       this.running.set(job.id, worker)
       this.listen(job, kind, worker)
     }
@@ -95,6 +95,7 @@ export class Jobs {
 
   private listen(job: Job, kind: AnyKind, worker: Worker) {
     let lastProgress = 0
+    let kept: { result: unknown } | undefined
     worker.on('message', (message: WorkerMessage<unknown>) => {
       if (this.stopped || !this.isRunning(job)) return
       if ('progress' in message) {
@@ -103,11 +104,17 @@ export class Jobs {
         this.context.db.update(jobs).set({ progress: message.progress, message: message.message }).where(eq(jobs.id, job.id)).run()
       }
       else if ('refusal' in message) this.end(job, 'failed', message.refusal)
-      else this.keep(job, kind, message.result)
+      else {
+        // Kept once the worker is gone, so that its memory and the database's are not needed at once.
+        kept = message
+        void worker.terminate()
+      }
     })
     worker.on('error', error => this.fail(job, error))
     worker.on('exit', () => {
       this.running.delete(job.id)
+      if (kept && !this.stopped && this.isRunning(job)) this.keep(job, kind, kept.result)
+      kept = undefined
       if (!this.stopped && this.isRunning(job)) this.end(job, 'failed', 'The work ended without a result. Please start it again.')
       this.next()
     })

@@ -16,6 +16,7 @@ import { TableRefused } from '../../shared/science/table/tableRefused'
 import type { ReadTable, ReadTask, ReadUpload } from '../domain/table/readUpload'
 
 const task = workerData as ReadTask
+const PROGRESS_MS = 250
 const post = (message: unknown, transfer: Transferable[] = []) => parentPort?.postMessage(message, transfer)
 
 /** The file from its first byte, unpacked where it is an original. */
@@ -51,7 +52,12 @@ async function look(): Promise<ProposalBasis> {
 
 async function readWith(layout: TableLayout, basis: ProposalBasis, proposal: TableProposal) {
   const { rows } = basis.survey
-  const built = await readTable(open(), layout, rows, seen => post({ progress: 0.3 + 0.4 * Math.min(1, seen / Math.max(1, rows)), message: `Reading ${task.fileName}: ${seen.toLocaleString('en')} of ${rows.toLocaleString('en')} rows.` }))
+  let last = 0
+  const built = await readTable(open(), layout, rows, (seen) => {
+    if (Date.now() - last < PROGRESS_MS) return
+    last = Date.now()
+    post({ progress: 0.3 + 0.4 * Math.min(1, seen / Math.max(1, rows)), message: `Reading ${task.fileName}: ${seen.toLocaleString('en')} of ${rows.toLocaleString('en')} rows.` })
+  })
   post({ progress: 0.75, message: `Keeping ${task.fileName}.` })
   const compressedBytes = await keepOriginal()
   const tables = built.samples.map(sample => readSample(sample, built, layout))

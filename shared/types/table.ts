@@ -49,6 +49,8 @@ export interface UploadLine {
   progress: { share: number, message: string } | null
   /** The same for files that one answer settles. */
   fingerprint: string | null
+  /** What a waiting file leaves open, by the field of the answer. */
+  open: string[]
   createdAt: string
   /** A waiting file is let go then. */
   expiresAt: string | null
