@@ -4,7 +4,7 @@ import { layouts, uploads } from '../db/schema'
 import { DomainError } from '../domain/DomainError'
 import { abandonReading } from '../domain/table/abandonReading'
 import { keepReading } from '../domain/table/keepReading'
-import { originalPath, receivedPath } from '../domain/table/originals'
+import { columnsPath, originalPath, receivedPath } from '../domain/table/originals'
 import type { ReadTask, ReadUpload } from '../domain/table/readUpload'
 import type { JobKind } from './kind'
 
@@ -28,7 +28,7 @@ export const read: JobKind<ReadInput, ReadUpload> = {
     if (compressed && !existsSync(original)) throw new DomainError('conflict', 'The file is not there any more. Please upload it again.')
     const remembered = db.select().from(layouts).orderBy(desc(layouts.createdAt)).all()
     const data: ReadTask = {
-      uploadId, fileName: upload.fileName, path: compressed ? original : received, compressed, originalPath: original, basis: upload.proposal, decided: decided === true,
+      uploadId, fileName: upload.fileName, path: compressed ? original : received, compressed, originalPath: original, columnsPath: columnsPath(folder, uploadId), basis: upload.proposal, decided: decided === true,
       layouts: remembered.map(({ fingerprint, layout }) => ({ fingerprint, answers: layout })),
     }
     return { data }

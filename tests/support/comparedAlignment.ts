@@ -2,6 +2,7 @@ import { createHash } from 'node:crypto'
 import type { OpenDatabase } from '../../server/db/open'
 import { packFloat64, packInt32 } from '../../server/db/packed'
 import { alignments, alignmentTables, originals, samples, tables, uploads } from '../../server/db/schema'
+import { keepColumns } from '../../server/domain/table/tableColumns'
 import type { SampleInput } from '../../shared/schemas/sample'
 import { alignmentDefaults } from '../../shared/science/alignment/settings'
 import type { TableLayout } from '../../shared/science/table/layout'
@@ -53,8 +54,9 @@ function addTable({ db }: Pick<OpenDatabase, 'db'>, studyId: string, createdBy: 
   const table = db.insert(tables).values({
     studyId, uploadId: upload.id, sampleId: sample.id, originalSha256: digest, fileName: `${column.name}.csv`, digest,
     columnName: emptyShare === undefined ? null : column.name, emptyShare: emptyShare ?? null,
-    layout: {} as TableLayout, measure: 'area', massKind: 'mz', features: detected.length, mz: bytes, retentionMinutes: bytes, intensity: bytes, statedFloor, createdBy,
+    layout: {} as TableLayout, measure: 'area', massKind: 'mz', features: detected.length, statedFloor, createdBy,
   }).returning().get()
+  keepColumns(db, table.id, { mz: detected, retentionMinutes: detected, intensity: detected })
   let row = 0
   return { sampleId: sample.id, tableId: table.id, digest, member: Array.from(intensity, value => Number.isNaN(value) ? -1 : row++) }
 }

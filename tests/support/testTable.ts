@@ -1,7 +1,8 @@
 import { createHash } from 'node:crypto'
 import type { OpenDatabase } from '../../server/db/open'
-import { packFloat64, packInt32 } from '../../server/db/packed'
+import { packFloat64 } from '../../server/db/packed'
 import { originals, samples, tables, uploads } from '../../server/db/schema'
+import { keepColumns } from '../../server/domain/table/tableColumns'
 import type { SampleInput } from '../../shared/schemas/sample'
 import type { MassKind, TableLayout } from '../../shared/science/table/layout'
 
@@ -18,16 +19,18 @@ let made = 0
 
 /** A table as if it had been uploaded and read, and its sample; `sample: null` leaves it without one. */
 export function addTestTable({ db }: Pick<OpenDatabase, 'db'>, studyId: string, createdBy: string, table: TestTable, sample: (Partial<SampleInput> & { name: string }) | null) {
-  const [mz, retentionMinutes, intensity] = [table.mz, table.minutes, table.intensity].map(column => packFloat64(Float64Array.from(column)))
+  const [mz, retentionMinutes, intensity] = [table.mz, table.minutes, table.intensity].map(column => Float64Array.from(column))
   if (!mz || !retentionMinutes || !intensity) throw new Error('a table has three columns')
-  const digest = createHash('sha256').update(mz).update(retentionMinutes).update(intensity).digest('hex')
+  const digest = createHash('sha256').update(packFloat64(mz)).update(packFloat64(retentionMinutes)).update(packFloat64(intensity)).digest('hex')
   const fileName = `${sample?.name ?? `table ${++made}`}.csv`
   db.insert(originals).values({ sha256: digest, bytes: 1, compressedBytes: 1 }).onConflictDoNothing().run()
   const upload = db.insert(uploads).values({ studyId, fileName, sha256: digest, bytes: 1, status: 'read', createdBy }).returning().get()
   const sampleId = sample ? db.insert(samples).values({ studyId, position: ++made, ...sample }).returning().get().id : null
-  return db.insert(tables).values({
+  const row = db.insert(tables).values({
     studyId, uploadId: upload.id, sampleId, originalSha256: digest, fileName, digest, layout: {} as TableLayout, measure: 'area', massKind: table.massKind ?? 'mz',
-    features: table.mz.length, mz, retentionMinutes, intensity, createdBy,
-    wideGroup: table.wideGroup ?? null, wideRow: table.wideRow ? packInt32(Int32Array.from(table.wideRow)) : null, columnName: table.wideGroup ? sample?.name ?? null : null,
+    features: table.mz.length, createdBy,
+    wideGroup: table.wideGroup ?? null, columnName: table.wideGroup ? sample?.name ?? null : null,
   }).returning().get()
+  keepColumns(db, row.id, { mz, retentionMinutes, intensity, wideRow: table.wideRow && Int32Array.from(table.wideRow) })
+  return row
 }

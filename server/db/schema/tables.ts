@@ -1,4 +1,4 @@
-import { blob, index, integer, real, sqliteTable, text } from 'drizzle-orm/sqlite-core'
+import { blob, index, integer, primaryKey, real, sqliteTable, text } from 'drizzle-orm/sqlite-core'
 import type { MassKind, Measure, TableLayout } from '../../../shared/science/table/layout'
 import type { RememberedAnswers } from '../../../shared/science/table/rememberAnswers'
 import type { ProposalBasis } from '../../../shared/science/table/tableProposal'
@@ -75,13 +75,6 @@ export const tables = sqliteTable('tables', {
   refusedRows: integer().notNull().default(0),
   /** Compressed JSON of the refused rows: line, column, value, reason. */
   refused: blob({ mode: 'buffer' }),
-  /** Packed Float64. */
-  mz: blob({ mode: 'buffer' }).notNull(),
-  retentionMinutes: blob({ mode: 'buffer' }).notNull(),
-  intensity: blob({ mode: 'buffer' }).notNull(),
-  width: blob({ mode: 'buffer' }),
-  /** Packed Int32: the row of the wide file each feature stood in. */
-  wideRow: blob({ mode: 'buffer' }),
   /** The peak limit a person states; else the floor is estimated. */
   statedFloor: real(),
   createdBy: text().notNull().references(() => people.id),
@@ -89,3 +82,16 @@ export const tables = sqliteTable('tables', {
   replacedAt: moment(),
   replacedBy: text(),
 }, table => [index('tables_study').on(table.studyId), index('tables_sample').on(table.sampleId), index('tables_digest').on(table.digest)])
+
+export type TableColumnName = 'mz' | 'retentionMinutes' | 'intensity' | 'width' | 'wideRow'
+
+/**
+ * The columns of a table, packed (Float64; wideRow Int32: the row of the wide file each feature stood in), each in parts of about a megabyte:
+ * a row of SQLite is in memory several times over while it is written, and a table may have two million features.
+ */
+export const tableColumns = sqliteTable('table_columns', {
+  tableId: text().notNull().references(() => tables.id, { onDelete: 'cascade' }),
+  name: text().$type<TableColumnName>().notNull(),
+  part: integer().notNull(),
+  bytes: blob({ mode: 'buffer' }).notNull(),
+}, table => [primaryKey({ columns: [table.tableId, table.name, table.part] })])

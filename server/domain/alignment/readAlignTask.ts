@@ -1,8 +1,8 @@
 import { eq } from 'drizzle-orm'
 import type { Database } from '../../db/open'
-import { unpackFloat64, unpackInt32 } from '../../db/packed'
 import { samples, tables } from '../../db/schema'
 import { DomainError } from '../DomainError'
+import { readColumn, readWideRows } from '../table/tableColumns'
 import type { AlignInput, AlignTask } from './alignInput'
 
 /** Reads the columns of the tables for the worker. */
@@ -17,11 +17,11 @@ export function readAlignTask(db: Database, input: AlignInput): AlignTask {
       digest: table.digest,
       blank: kind === 'solventBlank' || kind === 'processBlank',
       runOrder,
-      mz: unpackFloat64(table.mz),
-      retentionMinutes: unpackFloat64(table.retentionMinutes),
-      intensity: unpackFloat64(table.intensity),
+      mz: readColumn(db, table.id, 'mz'),
+      retentionMinutes: readColumn(db, table.id, 'retentionMinutes'),
+      intensity: readColumn(db, table.id, 'intensity'),
     })),
-    wide: rows.map(({ table }) => input.asGiven && table.wideGroup && table.wideRow ? { group: table.wideGroup, row: unpackInt32(table.wideRow) } : null),
+    wide: rows.map(({ table }) => input.asGiven && table.wideGroup ? { group: table.wideGroup, row: readWideRows(db, table.id) } : null),
     settings: input.settings,
   }
 }

@@ -1,9 +1,10 @@
 import { asc, eq } from 'drizzle-orm'
 import type { ComparisonData } from '../../../shared/formats/comparisonData'
 import type { Database } from '../../db/open'
-import { alignments, alignmentTables, tables } from '../../db/schema'
+import { alignments, alignmentTables } from '../../db/schema'
 import { unpackFloat64, unpackInt32 } from '../../db/packed'
 import { notFound } from '../DomainError'
+import { readColumn } from '../table/tableColumns'
 
 /** The numbers of an alignment that a comparison rests on, unpacked; intensities one column a table, in the alignment's order. */
 export function alignmentData(db: Database, alignmentId: string): Omit<ComparisonData, 'samples'> {
@@ -23,7 +24,7 @@ export function alignmentData(db: Database, alignmentId: string): Omit<Compariso
 
 /** All intensities of each table of an alignment, whether they found a group or not: floors are estimated from these. */
 export function tableIntensities(db: Database, alignmentId: string): Float64Array[] {
-  return db.select({ intensity: tables.intensity }).from(alignmentTables).innerJoin(tables, eq(tables.id, alignmentTables.tableId))
+  return db.select({ tableId: alignmentTables.tableId }).from(alignmentTables)
     .where(eq(alignmentTables.alignmentId, alignmentId)).orderBy(asc(alignmentTables.position)).all()
-    .map(({ intensity }) => unpackFloat64(intensity))
+    .map(({ tableId }) => readColumn(db, tableId, 'intensity'))
 }

@@ -1,12 +1,12 @@
 import { and, eq, isNull } from 'drizzle-orm'
 import { WAITING_DAYS } from '../../../shared/schemas/table'
 import type { Database } from '../../db/open'
-import { packFloat64, packInt32 } from '../../db/packed'
 import { newId } from '../../db/schema/id'
 import { originals, samples, tables, uploads } from '../../db/schema'
 import { record } from '../activity/record'
 import { touchStudy } from '../study/touchStudy'
-import { releaseReceived } from './originals'
+import { keepReadColumns } from './keepReadColumns'
+import { columnsPath, releaseReceived } from './originals'
 import type { ReadTable, ReadUpload } from './readUpload'
 import { remarkOf } from './readingRemark'
 import { retireTables, tablesToReplace } from './retireTables'
@@ -55,10 +55,10 @@ function keepTables(db: Database, folder: string, upload: Upload, { tables: read
     if (found.taken !== null) taken.add(found.taken)
     const { id } = db.insert(tables).values({
       studyId: upload.studyId, uploadId: upload.id, sampleId: found.sampleId, originalSha256: upload.sha256, fileName: upload.fileName, columnName: one.name, wideGroup, emptyShare: one.emptyShare,
-      digest: one.digest, layout, measure: layout.measure, massKind: layout.massKind, features: one.mz.length, refusedRows: one.refusedRows, refused: one.refused && Buffer.from(one.refused),
-      mz: packFloat64(one.mz), retentionMinutes: packFloat64(one.minutes), intensity: packFloat64(one.intensity), width: one.width && packFloat64(one.width), wideRow: one.row && packInt32(one.row),
+      digest: one.digest, layout, measure: layout.measure, massKind: layout.massKind, features: one.features, refusedRows: one.refusedRows, refused: one.refused && Buffer.from(one.refused),
       statedFloor: before?.statedFloor ?? null, createdBy: upload.createdBy,
     }).returning({ id: tables.id }).get()
+    keepReadColumns(db, id, columnsPath(folder, upload.id), one.columns)
     first ||= id
     if (before) successors.set(before.id, id)
   }

@@ -15,6 +15,9 @@ export function receivedPath(folder: string, uploadId: string): string {
   return join(folder, 'received', uploadId)
 }
 
+/** The columns that a worker has read of a file, on their way into the database. */
+export const columnsPath = (folder: string, uploadId: string) => `${receivedPath(folder, uploadId)}.columns`
+
 /** Lets an original go that no table and no waiting file needs. Call it after its last owner is gone. */
 export function releaseOriginal(db: Database, folder: string, sha256: string) {
   const table = db.select({ id: tables.id }).from(tables).where(eq(tables.originalSha256, sha256)).get()
@@ -31,7 +34,9 @@ export function releaseOriginal(db: Database, folder: string, sha256: string) {
 export function releaseReceived(db: Database, folder: string, uploadId: string) {
   afterTransaction(() => {
     const upload = db.select({ status: uploads.status }).from(uploads).where(eq(uploads.id, uploadId)).get()
-    if (upload?.status !== 'reading') rmSync(receivedPath(folder, uploadId), { force: true })
+    if (upload?.status === 'reading') return
+    rmSync(receivedPath(folder, uploadId), { force: true })
+    rmSync(columnsPath(folder, uploadId), { force: true })
   })
 }
 

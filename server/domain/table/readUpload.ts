@@ -1,6 +1,6 @@
 import type { SkippedKind } from '../../../shared/science/table/skippedLines'
 import type { TableLayout } from '../../../shared/science/table/layout'
-import type { FeatureColumns } from '../../../shared/science/table/packColumns'
+import type { TableColumnName } from '../../db/schema'
 import type { RememberedAnswers } from '../../../shared/science/table/rememberAnswers'
 import type { ProposalBasis } from '../../../shared/science/table/tableProposal'
 
@@ -12,6 +12,8 @@ export interface ReadTask {
   /** The file is an original already: compressed, and not to be kept again. */
   compressed: boolean
   originalPath: string
+  /** Where the worker writes the columns it has read, one after the other: they come by file, so that no more than a part of one is in memory twice. */
+  columnsPath: string
   /** What was found in the file before; null where it is looked through for the first time. */
   basis: ProposalBasis | null
   /** A person has settled what was open. */
@@ -20,8 +22,12 @@ export interface ReadTask {
   layouts: { fingerprint: string, answers: RememberedAnswers }[]
 }
 
-export interface ReadTable extends FeatureColumns {
-  row: Int32Array | null
+/** Where one packed column lies in the file of columns. */
+export interface ReadColumn { name: TableColumnName, offset: number, bytes: number }
+
+export interface ReadTable {
+  columns: ReadColumn[]
+  features: number
   name: string | null
   emptyShare: number | null
   digest: string

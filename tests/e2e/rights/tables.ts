@@ -19,11 +19,10 @@ const before: RightsRow['before'] = (fixture, { db, folder }) => {
     writeFileSync(path, gzipSync('m/z'))
   }
   db.insert(originals).values({ sha256, bytes: 3, compressedBytes: 23 }).onConflictDoNothing().run()
-  const empty = Buffer.alloc(0)
   const upload = { studyId, fileName: 'a.csv', sha256, bytes: 3, createdBy: analystId }
   const read = db.insert(uploads).values({ ...upload, status: 'read' }).returning().get().id
   fixture.uploadId = db.insert(uploads).values({ ...upload, status: 'refused' }).returning().get().id
-  fixture.tableId = db.insert(tables).values({ studyId, uploadId: read, originalSha256: sha256, fileName: 'a.csv', digest: newId(), layout: {} as never, measure: 'area', massKind: 'mz', features: 0, mz: empty, retentionMinutes: empty, intensity: empty, createdBy: analystId }).returning().get().id
+  fixture.tableId = db.insert(tables).values({ studyId, uploadId: read, originalSha256: sha256, fileName: 'a.csv', digest: newId(), layout: {} as never, measure: 'area', massKind: 'mz', features: 0, createdBy: analystId }).returning().get().id
 }
 
 const upload = '/api/studies/[studyId]/uploads'

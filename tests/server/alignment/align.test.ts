@@ -7,6 +7,7 @@ import { matrixCsv } from '../../../server/domain/alignment/matrixCsv'
 import { planAlignment } from '../../../server/domain/alignment/planAlignment'
 import { readAlignment } from '../../../server/domain/alignment/readAlignment'
 import type { Person } from '../../../server/domain/person/person'
+import { readColumn } from '../../../server/domain/table/tableColumns'
 import { newAlignmentSchema, type NewAlignment } from '../../../shared/schemas/alignment'
 import { addTestPerson, addTestStudy, openTestLaboratory, type TestLaboratory } from '../../support/laboratory'
 import { simulate } from '../../support/simulate'
@@ -50,7 +51,7 @@ describe('an alignment', () => {
     for (const { part, table } of parts) {
       const member = unpackInt32(part.member)
       const intensity = unpackFloat64(part.intensity)
-      const original = unpackFloat64(table.intensity)
+      const original = readColumn(open.db, table.id, 'intensity')
       expect(member).toHaveLength(row?.groups ?? -1)
       // Every row of a table stands in exactly one group.
       expect([...member].filter(at => at >= 0).sort((a, b) => a - b)).toEqual([...Array(table.features).keys()])

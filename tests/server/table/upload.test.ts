@@ -3,7 +3,6 @@ import { join } from 'node:path'
 import { buffer } from 'node:stream/consumers'
 import { eq } from 'drizzle-orm'
 import { afterEach, beforeEach, describe, expect, it } from 'vitest'
-import { unpackFloat64, unpackInt32 } from '../../../server/db/packed'
 import { activity, alignments, alignmentTables, originals, samples, tables, uploads } from '../../../server/db/schema'
 import { DomainError } from '../../../server/domain/DomainError'
 import type { Person } from '../../../server/domain/person/person'
@@ -16,6 +15,7 @@ import { originalPath, sweepFiles } from '../../../server/domain/table/originals
 import { checkRoom, receiveFile } from '../../../server/domain/table/receiveFile'
 import { findRefusedRows, refusedCsv } from '../../../server/domain/table/refusedRows'
 import { removeTable } from '../../../server/domain/table/removeTable'
+import { readColumn, readWideRows } from '../../../server/domain/table/tableColumns'
 import { dropExpiredUploads, removeUpload } from '../../../server/domain/table/removeUpload'
 import { MAX_TABLE_BYTES } from '../../../shared/schemas/table'
 import { addTestPerson, addTestStudy, openTestLaboratory, type TestLaboratory } from '../../support/laboratory'
@@ -59,8 +59,8 @@ describe('a clear file', () => {
     expect(onlyTable()).toMatchObject({ fileName: 'press_a1.csv', sampleId, sampleName: 'Press A1', features: 2, refusedRows: 0, measure: 'area', massKind: 'mz', bytes: plain.length, alignments: 0, gapFilled: false, remark: null })
     const row = laboratory.db.select().from(tables).get()
     if (!row) throw new Error('no row')
-    expect([row.mz, row.retentionMinutes, row.intensity].map(column => Array.from(unpackFloat64(column)))).toEqual([[100.1, 200.2], [1.5, 2.5], [1000.5, 2000.5]])
-    expect([row.width, row.wideRow, row.wideGroup]).toEqual([null, null, null])
+    expect((['mz', 'retentionMinutes', 'intensity', 'width'] as const).map(name => Array.from(readColumn(laboratory.db, row.id, name)))).toEqual([[100.1, 200.2], [1.5, 2.5], [1000.5, 2000.5], []])
+    expect([readWideRows(laboratory.db, row.id).length, row.wideGroup]).toEqual([0, null])
     expect([filesIn('incoming'), filesIn('received'), filesIn('originals')]).toEqual([[], [], [`${row.originalSha256}.gz`]])
   })
 
@@ -167,7 +167,7 @@ describe('a file that leaves something open', () => {
     await laboratory.jobs.idle()
     expect(waiting().map(line => line.fileName)).toEqual(['other.csv'])
     await upload('three.csv', open('347'))
-    const intensities = laboratory.db.select({ fileName: tables.fileName, intensity: tables.intensity }).from(tables).all().map(row => [row.fileName, unpackFloat64(row.intensity)[0]])
+    const intensities = list().tables.map(table => [table.fileName, readColumn(laboratory.db, table.id, 'intensity')[0]])
     expect(intensities.sort()).toEqual([['one.csv', 12345], ['three.csv', 12347], ['two.csv', 12346]])
   })
 
@@ -220,8 +220,8 @@ describe('a wide file', () => {
     expect(list().tables.map(table => [table.columnName, table.sampleName, table.features]).sort()).toEqual([['Carton B1', 'Carton B1', 31], ['Carton B2', 'Carton B2', 31], ['Press A1', 'Press A1', 30], ['Press A2', 'Press A2', 33]])
     const rows = laboratory.db.select().from(tables).all()
     expect(new Set(rows.map(row => row.wideGroup)).size).toBe(1)
-    for (const row of rows) expect([row.wideRow && unpackInt32(row.wideRow).length, unpackFloat64(row.mz).length]).toEqual([row.features, row.features])
-    expect(rows.find(row => row.columnName === 'Carton B1')?.wideRow?.readInt32LE(0)).toBe(0)
+    for (const row of rows) expect([readWideRows(laboratory.db, row.id).length, readColumn(laboratory.db, row.id, 'mz').length]).toEqual([row.features, row.features])
+    expect(readWideRows(laboratory.db, rows.find(row => row.columnName === 'Carton B1')?.id ?? '')[0]).toBe(0)
   })
   it('marks a column with hardly an empty cell as gap-filled', async () => {
     const lines = Array.from({ length: 200 }, (_, row) => `${100 + row},1,5,${row < 10 ? '' : 5}`)
