@@ -17,8 +17,8 @@ export interface ReadInput {
 /** Reads one uploaded file: into tables, into the list of files that wait for an answer, or not at all. */
 export const read: JobKind<ReadInput, ReadUpload> = {
   worker: 'read',
-  heapMb: 96,
-  youngHeapMb: 6,
+  heapMb: 48,
+  youngHeapMb: 2,
   prepare({ db, folder }, { uploadId, decided }) {
     const upload = db.select().from(uploads).where(eq(uploads.id, uploadId)).get()
     if (upload?.status !== 'reading') throw new DomainError('conflict', 'This file is not to be read any more.')
