@@ -1,5 +1,6 @@
 import { spawn, type ChildProcess } from 'node:child_process'
 import { mkdtempSync, rmSync } from 'node:fs'
+import { createServer } from 'node:net'
 import { tmpdir } from 'node:os'
 import { join } from 'node:path'
 import { fileURLToPath } from 'node:url'
@@ -7,12 +8,11 @@ import { fileURLToPath } from 'node:url'
 export interface BuiltServer { url: string, folder: string, pid: number, output: () => string, stop: () => Promise<void>, kill: () => Promise<void> }
 
 const entry = fileURLToPath(new URL('../../.output/server/index.mjs', import.meta.url))
-let nextPort = 4300 + (process.pid % 400) * 10
 
 /** Starts the built server on a loopback port of its own, with a data folder of its own unless one is given. */
 export async function startBuiltServer({ kind = 'lab', folder = '', env = {} }: { kind?: 'demo' | 'lab', folder?: string, env?: Record<string, string> } = {}): Promise<BuiltServer> {
   const data = folder || mkdtempSync(join(tmpdir(), 'steelyard-built-'))
-  const port = nextPort++
+  const port = await freePort()
   let output = ''
   const child = spawn(process.execPath, [entry], {
     env: { MALLOC_ARENA_MAX: '2', ...process.env, NODE_ENV: 'production', HOST: '127.0.0.1', NITRO_HOST: '127.0.0.1', PORT: String(port), NITRO_PORT: String(port), NITRO_SHUTDOWN_TIMEOUT: '2000', STEELYARD_KIND: kind, STEELYARD_DATA: data, ...env },
@@ -39,16 +39,26 @@ export async function startBuiltServer({ kind = 'lab', folder = '', env = {} }: 
   }
 }
 
+/** Waits for the server's own word that it listens: whatever else answers at the port is not it. */
 async function answering(url: string, child: ChildProcess, output: () => string) {
   for (let tries = 0; tries < 1200; tries++) {
     if (child.exitCode !== null) throw new Error(`The server ended at once:\n${output()}`)
-    try {
+    if (/Listening on http/.test(output())) {
       await fetch(`${url}/api/me`)
       return
     }
-    catch {
-      await new Promise(resolve => setTimeout(resolve, 100))
-    }
+    await new Promise(resolve => setTimeout(resolve, 100))
   }
   throw new Error(`The server did not answer within two minutes:\n${output()}`)
+}
+
+/** A port that nobody uses: tests run side by side on one machine. */
+function freePort(): Promise<number> {
+  return new Promise((resolve, reject) => {
+    const probe = createServer().on('error', reject).listen(0, '127.0.0.1', () => {
+      const address = probe.address()
+      const port = typeof address === 'object' && address !== null ? address.port : 0
+      probe.close(() => resolve(port))
+    })
+  })
 }
