@@ -5,7 +5,6 @@ import { existsSync, readFileSync, rmSync } from 'node:fs'
 import { prepare } from './start.mjs'
 
 const CHROMIUM = '/usr/bin/chromium'
-const RESULTS = 'test-results/vitest.json'
 
 prepare()
 installChromium()
@@ -13,7 +12,8 @@ let passed = 0
 let failed = 0
 step('lint', 'npx', ['eslint', '.', '--max-warnings', '0'])
 step('types', 'npx', ['nuxt', 'typecheck'])
-tests()
+tests('unit', 'reference', 'server', 'nuxt')
+tests('browser')
 console.log(`${passed} passed, ${failed} failed`)
 process.exit(failed > 0 ? 1 : 0)
 
@@ -24,15 +24,17 @@ function step(name, command, args) {
   else failed++
 }
 
-function tests() {
-  rmSync(RESULTS, { force: true })
-  console.log('\n== tests')
-  const { status } = spawnSync('npx', ['vitest', 'run', '--reporter=default', '--reporter=json', `--outputFile.json=${RESULTS}`], { stdio: 'inherit' })
-  const results = existsSync(RESULTS) ? JSON.parse(readFileSync(RESULTS, 'utf8')) : { numPassedTests: 0, numFailedTests: 0 }
-  passed += results.numPassedTests
-  failed += results.numFailedTests
+/** The browser tests come after the others: they want the machine to themselves. */
+function tests(...projects) {
+  const results = `test-results/${projects[0]}.json`
+  rmSync(results, { force: true })
+  console.log(`\n== tests: ${projects.join(', ')}`)
+  const { status } = spawnSync('npx', ['vitest', 'run', ...projects.flatMap(name => ['--project', name]), '--reporter=default', '--reporter=json', `--outputFile.json=${results}`], { stdio: 'inherit' })
+  const counted = existsSync(results) ? JSON.parse(readFileSync(results, 'utf8')) : { numPassedTests: 0, numFailedTests: 0 }
+  passed += counted.numPassedTests
+  failed += counted.numFailedTests
   // A run may fail without a failed test: an error outside one, or a file that can't be read.
-  if (status !== 0 && results.numFailedTests === 0) failed++
+  if (status !== 0 && counted.numFailedTests === 0) failed++
 }
 
 function installChromium() {
