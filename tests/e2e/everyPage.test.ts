@@ -111,7 +111,7 @@ describe.each(Object.entries(pages))('%s', (name, { as, lab: onLab, secret }) =>
     await watched.page.waitForLoadState('networkidle')
     expect(await axeFindings(watched.page)).toEqual([])
     // Nothing but a table of its own may be wider than the window.
-    expect(await watched.page.evaluate(() => document.documentElement.scrollWidth)).toBeLessThanOrEqual(width)
+    expect(await watched.page.evaluate<number>('document.documentElement.scrollWidth')).toBeLessThanOrEqual(width)
     expect(await watched.page.title()).toMatch(/\S · Steelyard$/)
     expect(watched.problems()).toEqual([])
     await watched.close()
