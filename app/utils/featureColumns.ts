@@ -28,7 +28,7 @@ export function featureColumns({ columns, preparationsA, preparationsB }: Verdic
     number('number', '#', '4rem', i => String(i + 1)),
     number('mz', 'm/z', '6rem', i => formatMz(columns.mz[i]!), exact(columns.mz)),
     number('minutes', 'min', '4rem', i => formatMinutes(columns.retentionMinutes[i]!), exact(columns.retentionMinutes)),
-    { id: 'verdict', label: 'Verdict', track: 'minmax(14rem,1.2fr)', isNumber: false, sort: 'verdict', cell: i => verdictPhrase(columns.verdict[i] ?? 0, foldLimit, names, { reason: columns.reason[i]!, atLeast: columns.atLeast[i]! }) },
+    { id: 'verdict', label: 'Verdict', track: '15rem', isNumber: false, sort: 'verdict', cell: i => verdictPhrase(columns.verdict[i] ?? 0, foldLimit, names, { reason: columns.reason[i]!, atLeast: columns.atLeast[i]! }) },
     number('ratio', 'log2 B/A', '5rem', i => formatLog2(columns.log2Ratio[i]!), i => Number.isFinite(columns.log2Ratio[i]) ? `${formatFold(columns.log2Ratio[i]!, names)}; ${columns.log2Ratio[i]}` : ''),
     number('q', 'q', '5.5rem', i => columns.method[i] === METHOD.assumed ? 'assumed' : formatProbability(columns.q[i]!), exact(columns.q)),
     number('reach', 'reach', '5rem', i => formatTimes(columns.reach[i]!), exact(columns.reach)),

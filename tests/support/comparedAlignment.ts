@@ -4,7 +4,7 @@ import { packFloat64, packInt32 } from '../../server/db/packed'
 import { alignments, alignmentTables, originals, samples, tables, uploads } from '../../server/db/schema'
 import { keepColumns } from '../../server/domain/table/tableColumns'
 import type { SampleInput } from '../../shared/schemas/sample'
-import { alignmentDefaults } from '../../shared/science/alignment/settings'
+import { alignmentDefaults, type AlignmentSettings } from '../../shared/science/alignment/settings'
 import type { TableLayout } from '../../shared/science/table/layout'
 
 /** One sample of a test alignment and its table: intensity per feature, NaN = not detected; rows are in the order of features. */
@@ -22,10 +22,10 @@ const noNumbers = packFloat64(new Float64Array(0))
 let made = 0
 
 /** Samples, tables and an alignment of them, features at m/z 200, 201 … and minutes 1, 2 …; for tests of comparisons. */
-export function addComparedAlignment({ db }: Pick<OpenDatabase, 'db'>, studyId: string, createdBy: string, columns: readonly TestColumn[], { practice = false, mz, retentionMinutes }: { practice?: boolean, mz?: Float64Array, retentionMinutes?: Float64Array } = {}) {
+export function addComparedAlignment({ db }: Pick<OpenDatabase, 'db'>, studyId: string, createdBy: string, columns: readonly TestColumn[], { practice = false, settings = alignmentDefaults, mz, retentionMinutes }: { practice?: boolean, settings?: AlignmentSettings, mz?: Float64Array, retentionMinutes?: Float64Array } = {}) {
   const features = columns[0]?.intensity.length ?? 0
   const alignment = db.insert(alignments).values({
-    studyId, createdBy, practice, groups: features, number: ++made, settings: alignmentDefaults, engineVersion: 'test', reference: 0,
+    studyId, createdBy, practice, groups: features, number: ++made, settings, engineVersion: 'test', reference: 0,
     mz: packFloat64(mz ?? Float64Array.from({ length: features }, (_, i) => 200 + i)),
     retentionMinutes: packFloat64(retentionMinutes ?? Float64Array.from({ length: features }, (_, i) => 1 + i)),
     groupSize: packInt32(new Int32Array(features)), neighbourStart: packInt32(new Int32Array(features + 1)), neighbourList: none,

@@ -1,8 +1,11 @@
+import { eq } from 'drizzle-orm'
 import { unpackVerdicts } from '../../../shared/formats/verdictColumns'
+import { settingDifferences } from '../../../shared/science/alignment/settingDifferences'
 import type { VerdictColumns } from '../../../shared/science/verdict/verdictResult'
 import type { Verdict } from '../../../shared/science/verdict/verdicts'
 import type { ChangedVersion, VersionChanges } from '../../../shared/types/comparison'
 import type { Database } from '../../db/open'
+import { alignments } from '../../db/schema'
 import { findVisibleAlignment } from '../alignment/findVisibleAlignment'
 import { DomainError } from '../DomainError'
 import type { Person } from '../person/person'
@@ -33,9 +36,16 @@ export async function compareVersions(db: Database, studyId: string, comparisonI
   return {
     before: line(earlier, other),
     after: line(version, comparison),
-    differs: versionDifferences(content(earlier), content(version)),
+    differs: [...versionDifferences(content(earlier), content(version)), ...alignedOtherwise(db, earlier.alignmentId, version.alignmentId)],
     ...changesOf(before, after, match),
   }
+}
+
+/** What two alignments were set otherwise, as sentences. */
+function alignedOtherwise(db: Database, before: string, after: string): string[] {
+  const settingsOf = (id: string) => db.select({ settings: alignments.settings }).from(alignments).where(eq(alignments.id, id)).get()?.settings
+  const [was, is] = [settingsOf(before), settingsOf(after)]
+  return was && is ? settingDifferences(was, is) : []
 }
 
 async function columnsOf(db: Database, versionId: string): Promise<VerdictColumns> {

@@ -6,6 +6,7 @@ import { prepareComparison, prepareVersion } from '../../../server/domain/compar
 import { verdictCsv } from '../../../server/domain/comparison/verdictCsv'
 import type { Person } from '../../../server/domain/person/person'
 import type { VisibleStudy } from '../../../server/domain/study/findVisibleStudy'
+import { alignmentDefaults } from '../../../shared/science/alignment/settings'
 import { newComparisonSchema, newVersionSchema } from '../../../shared/schemas/comparison'
 import { comparisonDefaults } from '../../../shared/science/verdict/settings'
 import { addComparedAlignment } from '../../support/comparedAlignment'
@@ -43,7 +44,7 @@ beforeAll(async () => {
   const tighter = addComparedAlignment(laboratory, study.id, student.id, [
     { name: '=a1', intensity: [1000, 5000, none, 400], again: { ...a, member: [0, 1, -1, 2] } },
     { name: 'b1', intensity: [1100, none, 4900, none], again: { ...b, member: [0, -1, 1, -1] } },
-  ], { practice: true })
+  ], { practice: true, settings: { ...alignmentDefaults, retentionMinutes: 0.02 } })
   practice = await run(prepareComparison(db, study, newComparisonSchema.parse({ alignmentId: tighter.alignment.id, title: 'Tighter' }), student), student)
 })
 afterAll(() => laboratory.close())
@@ -67,6 +68,7 @@ describe('what changed', () => {
     expect([result.onlyBefore, result.onlyAfter]).toEqual([0, 1])
     expect(result.features).toEqual([expect.objectContaining({ index: 1, indexBefore: 1, from: 'level', to: 'onlyA', highestCounts: 5000 })])
     expect(result.differs[0]).toMatch(/^Alignment \d+ → \d+\.$/)
+    expect(result.differs).toContain('Time tolerance 0.02 min (before: time tolerance 0.1 min).')
     expect(result.before.title).toBe('Official')
   })
 
