@@ -3,6 +3,7 @@ import workerSources from '#workers'
 import { openDatabase, type Database } from '../db/open'
 import { jobKinds } from '../jobs'
 import { Jobs } from '../jobs/runner'
+import { demoAccounts, demoPassword } from '../domain/demo/accounts'
 import { addDemoAccounts } from '../domain/demo/addDemoAccounts'
 import { issueFirstCode } from '../domain/person/firstLabLead'
 import { addressProblem, dataFolder, laboratoryKind, ownAddress } from '../utils/environment'
@@ -40,6 +41,7 @@ export default defineNitroPlugin((nitro) => {
   async function welcome(db: Database) {
     if (kind === 'demo') {
       await addDemoAccounts(db, passwordHasher)
+      console.log(`Demo laboratory with invented data. Open ${ownAddress()} and sign in as ${demoAccounts.map(account => account.signInName).join(', ')} with the password: ${demoPassword}`)
       return startDemo(useLaboratory())
     }
     const code = issueFirstCode(db)

@@ -19,6 +19,7 @@ describe('a data folder', () => {
     const { password, accounts } = await (await fetch(`${demo.url}/api/demo-accounts`)).json() as { password: string, accounts: { signInName: string }[] }
     expect(accounts).toHaveLength(demoAccounts.length)
     for (const { signInName } of accounts) await signInCookie(demo.url, signInName, password)
+    expect(demo.output()).toContain(`sign in as ${demoAccounts.map(account => account.signInName).join(', ')} with the password: ${password}`)
     await demo.kill()
     await expect(startBuiltServer({ kind: 'lab', folder: demo.folder })).rejects.toThrow('holds a demo laboratory; it cannot be opened as a real one')
   })
