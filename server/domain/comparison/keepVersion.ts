@@ -3,9 +3,10 @@ import { ENGINE_VERSION } from '../../../shared/science/engineVersion'
 import type { ComparedSample } from '../../../shared/science/verdict/settings'
 import type { VerdictResult } from '../../../shared/science/verdict/verdictResult'
 import type { Database } from '../../db/open'
-import { alignments, comparisons, comparisonVersions, studies } from '../../db/schema'
+import { alignments, comparisons, comparisonVersions } from '../../db/schema'
 import { record } from '../activity/record'
 import { notFound } from '../DomainError'
+import { touchStudy } from '../study/touchStudy'
 import type { CompareInput } from './compareInput'
 import { readSamples, storeSample } from './storedSample'
 import { versionDifferences } from './versionDifferences'
@@ -36,7 +37,7 @@ export function keepVersion(db: Database, studyId: string, input: CompareInput, 
     columns: Buffer.from(result.columns.buffer, result.columns.byteOffset, result.columns.byteLength),
     createdBy: personId,
   }).run()
-  db.update(studies).set({ lastActivityAt: new Date() }).where(eq(studies.id, studyId)).run()
+  if (!input.practice) touchStudy(db, studyId)
   record(db, { personId, action: number === 1 ? 'make comparison' : 'save version', studyId, subjectId: comparisonId, detail: `${input.title}, version ${number}${input.practice ? ', practice' : ''}` })
   return comparisonId
 }
