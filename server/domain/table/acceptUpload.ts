@@ -28,7 +28,7 @@ export function acceptUpload({ db, folder, jobs }: UploadPlace, studyId: string,
       const upload = tx.insert(uploads).values({ studyId, fileName: name, sha256: file.sha256, bytes: file.bytes, status: 'reading', replacesTableId: replaces ?? null, createdBy: person.id }).returning().get()
       renameSync(file.path, receivedPath(folder, upload.id))
       const job = jobs.add({ kind: 'read', studyId, input: { uploadId: upload.id }, personId: person.id }, { unlimited: true })
-      record(tx, { personId: person.id, action: 'table.upload', studyId, subjectId: upload.id, detail: name })
+      record(tx, { personId: person.id, action: 'upload table', studyId, subjectId: upload.id, detail: name })
       const row = tx.update(uploads).set({ jobId: job.id }).where(eq(uploads.id, upload.id)).returning().get()
       return { upload: uploadLine(row), known: null }
     }, { behavior: 'immediate' })

@@ -26,7 +26,7 @@ export function answerUpload(place: UploadPlace, studyId: string, uploadId: stri
     if (Object.keys(answers).length > 0 && upload.fingerprint !== null) {
       const name = survey.header.filter(title => title.trim() !== '').join(', ').slice(0, 80)
       db.insert(layouts).values({ name, fingerprint: upload.fingerprint, layout: remembered, createdBy: person.id }).run()
-      record(db, { personId: person.id, action: 'layout.remember', studyId, subjectId: uploadId, detail: name })
+      record(db, { personId: person.id, action: 'remember layout', studyId, subjectId: uploadId, detail: name })
     }
     readAgain(place, upload, answers, person)
     const others = upload.fingerprint === null ? [] : db.select().from(uploads).where(and(eq(uploads.studyId, studyId), eq(uploads.fingerprint, upload.fingerprint), eq(uploads.status, 'waiting'))).all().filter(other => other.id !== uploadId)

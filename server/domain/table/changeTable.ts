@@ -20,7 +20,7 @@ export function changeTable(db: Database, studyId: string, tableId: string, chan
       if (other) throw new DomainError('conflict', `“${sample.name}” has a table already, ${other.fileName}. Give that one another sample first, or replace it.`, [{ field: 'sampleId', sentence: `“${sample.name}” has a table already.` }])
     }
     db.update(tables).set(change).where(eq(tables.id, tableId)).run()
-    record(db, { personId: person.id, action: 'table.change', studyId, subjectId: tableId, detail: table.fileName })
+    record(db, { personId: person.id, action: 'edit table', studyId, subjectId: tableId, detail: table.fileName })
     touchStudy(db, studyId)
     return { id: tableId }
   }, { behavior: 'immediate' })

@@ -27,7 +27,7 @@ export function keepReading(db: Database, folder: string, uploadId: string, resu
   else {
     const remark = keepTables(db, folder, upload, result)
     db.update(uploads).set({ status: 'read', proposal: basis, fingerprint, layout: result.layout, remark, expiresAt: null, replacesTableId: null }).where(eq(uploads.id, uploadId)).run()
-    record(db, { personId: upload.createdBy, action: 'table.read', studyId: upload.studyId, subjectId: uploadId, detail: `${upload.fileName}: ${result.rowsRead} rows` })
+    record(db, { personId: upload.createdBy, action: 'read table', studyId: upload.studyId, subjectId: uploadId, detail: `${upload.fileName}: ${result.rowsRead} rows` })
   }
   touchStudy(db, upload.studyId)
   releaseReceived(db, folder, uploadId)

@@ -14,7 +14,7 @@ export function removeTable(db: Database, folder: string, studyId: string, table
     if (!table) throw notFound()
     if (isUsed(db, tableId)) throw new DomainError('conflict', 'An alignment rests on this table, so it stays. Replace it, and run the alignment again.')
     dropTable(db, folder, table)
-    record(db, { personId: person.id, action: 'table.remove', studyId, subjectId: tableId, detail: table.fileName })
+    record(db, { personId: person.id, action: 'remove table', studyId, subjectId: tableId, detail: table.fileName })
     touchStudy(db, studyId)
     return { id: tableId }
   }, { behavior: 'immediate' })

@@ -18,7 +18,7 @@ export function removeUpload({ db, folder, jobs }: UploadPlace, studyId: string,
   if (after?.status === 'read') return { id: uploadId }
   db.transaction(() => {
     dropUpload(db, folder, upload)
-    record(db, { personId: person.id, action: 'table.uploadRemove', studyId, subjectId: uploadId, detail: upload.fileName })
+    record(db, { personId: person.id, action: 'remove upload', studyId, subjectId: uploadId, detail: upload.fileName })
   }, { behavior: 'immediate' })
   return { id: uploadId }
 }
@@ -34,7 +34,7 @@ export function dropExpiredUploads(db: Database, folder: string, now = new Date(
   db.transaction(() => {
     for (const upload of db.select().from(uploads).where(and(eq(uploads.status, 'waiting'), lt(uploads.expiresAt, now))).all()) {
       dropUpload(db, folder, upload)
-      record(db, { personId: null, action: 'table.uploadExpire', studyId: upload.studyId, subjectId: upload.id, detail: upload.fileName })
+      record(db, { personId: null, action: 'expire upload', studyId: upload.studyId, subjectId: upload.id, detail: upload.fileName })
     }
   }, { behavior: 'immediate' })
 }

@@ -23,7 +23,7 @@ export function retireTables(db: Database, folder: string, upload: Upload, retir
   for (const { table, successor } of retired) {
     if (isUsed(db, table.id)) db.update(tables).set({ replacedAt: new Date(), replacedBy: successor }).where(eq(tables.id, table.id)).run()
     else dropTable(db, folder, table)
-    record(db, { personId: upload.createdBy, action: 'table.replace', studyId: table.studyId, subjectId: table.id, detail: `${table.fileName} by ${upload.fileName}` })
+    record(db, { personId: upload.createdBy, action: 'replace table', studyId: table.studyId, subjectId: table.id, detail: `${table.fileName} by ${upload.fileName}` })
   }
 }
 

@@ -300,7 +300,7 @@ describe('a table', () => {
     await upload('one.csv', plain)
     changeTable(laboratory.db, studyId, onlyTable().id, { statedFloor: 5 }, person)
     removeTable(laboratory.db, laboratory.folder, studyId, onlyTable().id, person)
-    expect(laboratory.db.select({ action: activity.action }).from(activity).all().map(row => row.action)).toEqual(['table.upload', 'table.read', 'table.change', 'table.remove'])
+    expect(laboratory.db.select({ action: activity.action }).from(activity).all().map(row => row.action)).toEqual(['upload table', 'read table', 'edit table', 'remove table'])
   })
 })
 
