@@ -1,8 +1,8 @@
 import type { EChartsOption } from 'echarts'
 import type { AlignedTable } from '#shared/types/alignment'
+import { counted, signed } from '#shared/science/numeric/numberWords'
 import type { Palette } from '#shared/tokens'
 import { chartText, minutesAxis, plainAxis } from '~/charts/axis'
-import { counted, signed } from '~/utils/alignmentWords'
 
 export type DriftTable = Pick<AlignedTable, 'sampleName' | 'drift'>
 

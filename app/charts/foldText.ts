@@ -1,7 +1,7 @@
 import type { VerdictResult } from '#shared/science/verdict/verdictResult'
 import type { ComparisonSettings } from '#shared/science/verdict/settings'
 import type { SideNames } from '#shared/science/verdict/reasonFacts'
-import { threeDigits, times } from '#shared/science/verdict/numberWords'
+import { threeDigits, times } from '#shared/science/numeric/numberWords'
 import type { FoldPoints } from '~/charts/foldPoints'
 import { formatCount } from '~/utils/formatMeasures'
 

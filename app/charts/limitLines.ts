@@ -1,6 +1,6 @@
 import type { ScatterSeriesOption } from 'echarts/charts'
 import type { ComparisonSettings } from '#shared/science/verdict/settings'
-import { threeDigits, times } from '#shared/science/verdict/numberWords'
+import { threeDigits, times } from '#shared/science/numeric/numberWords'
 import { fonts, type Palette } from '#shared/tokens'
 import type { FoldPoints } from '~/charts/foldPoints'
 

@@ -1,8 +1,9 @@
 import type { EChartsOption } from 'echarts'
 import type { AlignedTable } from '#shared/types/alignment'
+import { counted, signed } from '#shared/science/numeric/numberWords'
 import type { Palette } from '#shared/tokens'
 import { chartText, plainAxis } from '~/charts/axis'
-import { counted, signed } from '~/utils/alignmentWords'
+import { formatPpm } from '~/utils/formatMeasures'
 
 export type MassTable = Pick<AlignedTable, 'sampleName' | 'offsetPpm' | 'offsetApplied' | 'residualMedianPpm'>
 
@@ -39,6 +40,6 @@ export function massErrorText(tables: readonly MassTable[]): string {
   const sentences = [taken.length === 0
     ? 'No mass offset was taken out.'
     : `A mass offset was taken out of ${counted(taken.length, 'table')}: ${taken.slice(0, 4).map(table => `${table.sampleName} ${signed(table.offsetPpm, 1)} ppm`).join(', ')}${taken.length > 4 ? ' and others' : ''}.`]
-  if (residuals.length > 0) sentences.push(`Afterwards half of the shared features lie within ${Math.min(...residuals).toFixed(1)} to ${Math.max(...residuals).toFixed(1)} ppm of their group's centre, by table.`)
+  if (residuals.length > 0) sentences.push(`Afterwards half of the shared features lie within ${formatPpm(Math.min(...residuals))} to ${formatPpm(Math.max(...residuals))} ppm of their group's centre, by table.`)
   return sentences.join(' ')
 }

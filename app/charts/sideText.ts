@@ -1,5 +1,5 @@
 import type { ComparedSample } from '#shared/science/verdict/settings'
-import { counted, threeDigits } from '#shared/science/verdict/numberWords'
+import { counted, threeDigits } from '#shared/science/numeric/numberWords'
 
 type Weighed = Pick<ComparedSample, 'side' | 'kind' | 'name' | 'preparation' | 'amount' | 'amountUnit'>
 

@@ -25,22 +25,3 @@ export function settingsLine(settings: AlignmentSettings): string {
     settings.correctDrift ? 'drift corrected' : 'drift left',
   ].join(' · ')
 }
-
-/** A whole number with thin spaces between thousands. */
-export const wholeNumber = (value: number): string => value.toLocaleString('en-GB').replaceAll(',', '\u202F')
-
-/** A share as per cent: whole from 10 %, one decimal below; 0 only for none. */
-export function percent(part: number, whole: number): string {
-  if (whole === 0) return 'none'
-  const value = 100 * part / whole
-  return `${value >= 10 || value === 0 ? Math.round(value) : Math.max(0.1, Number(value.toFixed(1)))} %`
-}
-
-/** “1 table”, “3 tables”. */
-export const counted = (count: number, one: string, many = `${one}s`): string => `${wholeNumber(count)} ${count === 1 ? one : many}`
-
-/** A signed number with a true minus. */
-export const signed = (value: number, decimals: number): string => {
-  const text = Math.abs(value).toFixed(decimals)
-  return Number(text) === 0 ? text : `${value < 0 ? '−' : '+'}${text}`
-}

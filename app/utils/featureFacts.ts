@@ -1,6 +1,6 @@
 import type { SideNames } from '#shared/science/verdict/reasonFacts'
 import { METHOD } from '#shared/science/verdict/reasons'
-import { threeDigits } from '#shared/science/verdict/numberWords'
+import { threeDigits } from '#shared/science/numeric/numberWords'
 import type { ComparisonSettings } from '#shared/science/verdict/settings'
 import type { VerdictResult } from '#shared/science/verdict/verdictResult'
 import { formatIntensity } from '~/utils/formatMeasures'

@@ -1,3 +1,5 @@
+import { wholeNumber } from '#shared/science/numeric/numberWords'
+
 /** What stands where a number does not apply or was not detected. */
 export const NO_NUMBER = '–'
 
@@ -19,7 +21,15 @@ export function formatIntensity(intensity: number): string {
   return `${digits.replace('-', '−')} × 10${[...exponent].map(sign => SUPERSCRIPT[sign] ?? '').join('')}`
 }
 
-/** A whole number with thin groups: 12 345. */
-export function formatCount(count: number): string {
-  return String(count).replace(/\B(?=(\d{3})+$)/g, '\u202F')
+/** How a count stands on every page: 12 345. */
+export const formatCount = wholeNumber
+
+/** What a count has gained or lost: +12, −3 400, 0. */
+export const formatGain = (gain: number) => gain === 0 ? '0' : `${gain < 0 ? '−' : '+'}${formatCount(Math.abs(gain))}`
+
+/** A share as per cent: whole from 10 %, one decimal below; 0 only for none. */
+export function formatShare(part: number, whole: number): string {
+  if (whole === 0) return 'none'
+  const value = 100 * part / whole
+  return `${value >= 10 || value === 0 ? Math.round(value) : Math.max(0.1, Number(value.toFixed(1)))} %`
 }

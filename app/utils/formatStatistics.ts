@@ -1,14 +1,9 @@
-import { signedLog2, threeDigits } from '#shared/science/verdict/numberWords'
+import { probability, signed, threeDigits } from '#shared/science/numeric/numberWords'
 import { NO_NUMBER } from '~/utils/formatMeasures'
-
-/** Below this a probability rests on the tail of a curve that nobody has measured. */
-const SMALLEST_PROBABILITY = 1e-15
 
 /** p or q with two significant digits; never 0. */
 export function formatProbability(p: number): string {
-  if (!Number.isFinite(p)) return NO_NUMBER
-  if (p < SMALLEST_PROBABILITY) return '< 1e-15'
-  return p >= 0.001 ? p.toPrecision(2) : p.toExponential(1)
+  return Number.isFinite(p) ? probability(p) : NO_NUMBER
 }
 
 /** A ratio of two intensities: ×3.2. */
@@ -18,7 +13,7 @@ export function formatTimes(ratio: number): string {
 
 /** log2 ratio with its sign and two decimals: +1.68. */
 export function formatLog2(log2Ratio: number): string {
-  return Number.isFinite(log2Ratio) ? signedLog2(log2Ratio) : NO_NUMBER
+  return Number.isFinite(log2Ratio) ? signed(log2Ratio, 2) : NO_NUMBER
 }
 
 /** A log2 ratio of B over A as the ratio of the greater to the smaller side: "×3.2 in B"; "×1.0" where equal. */

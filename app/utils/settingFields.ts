@@ -1,4 +1,4 @@
-import { threeDigits, times } from '#shared/science/verdict/numberWords'
+import { threeDigits, times } from '#shared/science/numeric/numberWords'
 import { comparisonDefaults, type ComparisonSettings } from '#shared/science/verdict/settings'
 import { formatIntensity } from '~/utils/formatMeasures'
 

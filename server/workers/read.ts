@@ -13,6 +13,7 @@ import { proposeLayout } from '../../shared/science/table/proposeLayout'
 import { recallAnswers } from '../../shared/science/table/rememberAnswers'
 import type { ProposalBasis, TableProposal } from '../../shared/science/table/tableProposal'
 import { TableRefused } from '../../shared/science/table/tableRefused'
+import { wholeNumber } from '../../shared/science/numeric/numberWords'
 import { packFloat64, packInt32 } from '../db/packed'
 import type { ReadColumn, ReadTable, ReadTask, ReadUpload } from '../domain/table/readUpload'
 
@@ -59,7 +60,7 @@ async function readWith(layout: TableLayout, basis: ProposalBasis, proposal: Tab
   const built = await readTable(open(), layout, rows, (seen) => {
     if (Date.now() - last < PROGRESS_MS) return
     last = Date.now()
-    post({ progress: 0.3 + 0.4 * Math.min(1, seen / Math.max(1, rows)), message: `Reading ${task.fileName}: ${seen.toLocaleString('en')} of ${rows.toLocaleString('en')} rows.` })
+    post({ progress: 0.3 + 0.4 * Math.min(1, seen / Math.max(1, rows)), message: `Reading ${task.fileName}: ${wholeNumber(seen)} of ${wholeNumber(rows)} rows.` })
   })
   post({ progress: 0.75, message: `Keeping ${task.fileName}.` })
   const compressedBytes = await keepOriginal()

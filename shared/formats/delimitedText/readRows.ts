@@ -1,5 +1,6 @@
 import Papa from 'papaparse'
 import { TableRefused } from '../../science/table/tableRefused'
+import { wholeNumber } from '../../science/numeric/numberWords'
 
 /** Longer than any line of a feature table: a quotation mark that is never closed, or no table. */
 const MAX_LINE_CHARACTERS = 1_000_000
@@ -29,7 +30,7 @@ export async function* readRows(texts: AsyncIterable<string>, delimiter: string)
   for await (const text of texts) {
     if (text.includes('\0')) throw new TableRefused(`This is not a text table: after line ${line} it holds bytes that no text has.`)
     const batch = parse(rest + text, false)
-    if (rest.length > MAX_LINE_CHARACTERS) throw new TableRefused(`Line ${line} is longer than ${MAX_LINE_CHARACTERS.toLocaleString('en')} characters: a quotation mark that is never closed, or no table.`)
+    if (rest.length > MAX_LINE_CHARACTERS) throw new TableRefused(`Line ${line} is longer than ${wholeNumber(MAX_LINE_CHARACTERS)} characters: a quotation mark that is never closed, or no table.`)
     if (batch.rows.length > 0) yield batch
   }
   if (rest !== '') yield parse(rest, true)

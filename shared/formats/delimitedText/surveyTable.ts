@@ -3,6 +3,7 @@ import { MAX_TABLE_ROWS, type TextEncoding } from '../../science/table/layout'
 import { skippedKind } from '../../science/table/skippedLines'
 import { TableRefused } from '../../science/table/tableRefused'
 import type { TableSurvey } from '../../science/table/tableSurvey'
+import { wholeNumber } from '../../science/numeric/numberWords'
 import { decodeText, markedEncoding, whyNoText, WrongEncoding } from './encoding'
 import { stripFormulaGuard } from './formulaGuard'
 import { readRows } from './readRows'
@@ -40,7 +41,7 @@ async function surveyAs(open: OpenFile, encoding: TextEncoding): Promise<TableSu
   if (text.trim() === '') throw new TableRefused('The file is empty.')
   const sketch = sketchTable(text)
   if (sketch === null) throw new TableRefused('This is not a table of features: no columns of numbers were found in it.')
-  if (sketch.header.length > MAX_COLUMNS) throw new TableRefused(`The file has more than ${MAX_COLUMNS.toLocaleString('en')} columns, the most that are read.`)
+  if (sketch.header.length > MAX_COLUMNS) throw new TableRefused(`The file has more than ${wholeNumber(MAX_COLUMNS)} columns, the most that are read.`)
   return surveyRows(open, encoding, sketch)
 }
 
@@ -59,7 +60,7 @@ async function surveyRows(open: OpenFile, encoding: TextEncoding, sketch: TableS
       }
       if (survey.preview.length < PREVIEW_ROWS) survey.preview.push({ line, cells: row.map(cell => stripFormulaGuard(cell).slice(0, 200)) })
     })
-    if (survey.rows > MAX_TABLE_ROWS) throw new TableRefused(`The file has more than ${MAX_TABLE_ROWS.toLocaleString('en')} rows, the most that is read.`)
+    if (survey.rows > MAX_TABLE_ROWS) throw new TableRefused(`The file has more than ${wholeNumber(MAX_TABLE_ROWS)} rows, the most that is read.`)
   }
   return survey
 }

@@ -1,3 +1,4 @@
+import { wholeNumber } from '../numeric/numberWords'
 import { GrowingFloats, GrowingIntegers } from './growingColumn'
 import { MAX_TABLE_ROWS, MAX_TABLE_VALUES, type TableLayout } from './layout'
 import { isMissing } from './missingWords'
@@ -61,7 +62,7 @@ export class ColumnBuilder {
         return
       }
     }
-    if (++this.rows > MAX_TABLE_ROWS) throw new TableRefused(`The file has more than ${MAX_TABLE_ROWS.toLocaleString('en')} rows, the most that is read.`)
+    if (++this.rows > MAX_TABLE_ROWS) throw new TableRefused(`The file has more than ${wholeNumber(MAX_TABLE_ROWS)} rows, the most that is read.`)
     if (row.length > this.lastColumn && row.slice(this.lastColumn).some(cell => cell.trim() !== '')) {
       this.refusals.add(line, 'the whole line', row.slice(this.lastColumn).join(' '), `the line has ${row.length} cells, the header ${this.lastColumn}`)
       return
@@ -110,7 +111,7 @@ export class ColumnBuilder {
         const whyTime = whyNoTime(row[sample.minutesColumn], own)
         if (whyTime !== null) return this.refuse(line, sample.minutesColumn, row[sample.minutesColumn], whyTime)
       }
-      if (++this.values > MAX_TABLE_VALUES) throw new TableRefused(`The file holds more than ${MAX_TABLE_VALUES.toLocaleString('en')} values above zero, the most that is read.`)
+      if (++this.values > MAX_TABLE_VALUES) throw new TableRefused(`The file holds more than ${wholeNumber(MAX_TABLE_VALUES)} values above zero, the most that is read.`)
       const columns = this.samples[index]
       columns?.intensity.push(intensity)
       columns?.minutes?.push(own)

@@ -1,3 +1,4 @@
+import { wholeNumber } from '../numeric/numberWords'
 import { MAX_REFUSED_ROWS } from './layout'
 import { TableRefused } from './tableRefused'
 
@@ -14,14 +15,14 @@ export class Refusals {
     this.rows.push({ line, column, value: Array.from(kept).join(''), reason })
     if (this.rows.length > MAX_REFUSED_ROWS) {
       const first = this.rows[0]
-      throw new TableRefused(`More than ${MAX_REFUSED_ROWS.toLocaleString('en')} rows can't be used, the first on line ${first?.line}, column ${first?.column}: ${first?.reason}. Correct the layout or the file.`)
+      throw new TableRefused(`More than ${wholeNumber(MAX_REFUSED_ROWS)} rows can't be used, the first on line ${first?.line}, column ${first?.column}: ${first?.reason}. Correct the layout or the file.`)
     }
   }
 }
 
 /** Why a cell is no m/z; null where it is one. The limits are those of METHODS 2. */
 export function whyNoMz(text: string | undefined, value: number): string | null {
-  return whyNoNumber(text, value) ?? (value > 0 && value < 1e5 ? null : 'm/z must lie above 0 and below 100,000')
+  return whyNoNumber(text, value) ?? (value > 0 && value < 1e5 ? null : 'm/z must lie above 0 and below 100\u202F000')
 }
 
 /** Why a cell is no retention time; null where it is one. */

@@ -1,7 +1,7 @@
 import { AMOUNT_FIELD_NAMES } from './chooseSamples'
 import { sidesFollowBatch, sidesFollowRunOrder } from './confounding'
 import { isUnprovable } from './floors'
-import { counted, threeDigits, times } from './numberWords'
+import { counted, threeDigits, times } from '../numeric/numberWords'
 import type { ComparedSample, ComparisonSettings } from './settings'
 import type { SideSummary } from './sideSummary'
 import type { VerdictResult } from './verdictResult'

@@ -1,5 +1,5 @@
 import { assumedMoreLimit, assumedStandardError, ONE_SIDED_95 } from '../statistics/assumedPrecision'
-import { counted, foldTimes, probability, signedLog2, threeDigits, times } from './numberWords'
+import { counted, foldTimes, namedProbability, signed, threeDigits, times } from '../numeric/numberWords'
 import type { ComparisonSettings } from './settings'
 import type { VerdictResult } from './verdictResult'
 
@@ -69,18 +69,19 @@ export class ReasonFacts {
   get moreName() { return this.names[this.moreSide] }
   get lessName() { return this.names[this.moreSide === 'a' ? 'b' : 'a'] }
   get fold() { return times(2 ** this.settings.foldLimit) }
-  get q() { return probability(this.columns.q[this.i]!) }
+  get q() { return namedProbability('q', this.columns.q[this.i]!) }
+  get equivalenceP() { return namedProbability('p', this.columns.equivalenceP[this.i]!) }
 
   get ratio() {
     const log2Ratio = this.columns.log2Ratio[this.i]!
     const [more, less] = log2Ratio < 0 ? [this.names.a, this.names.b] : [this.names.b, this.names.a]
     const size = 2 ** Math.abs(log2Ratio)
     const words = threeDigits(size) === '1' ? `${this.names.a} and ${this.names.b} are equal` : `${more} holds ${times(size)} of ${less}`
-    return `${words} (log2 ratio ${signedLog2(log2Ratio)})`
+    return `${words} (log2 ratio ${signed(log2Ratio, 2)})`
   }
 
   get interval() {
-    return `95 % interval of the log2 ratio ${signedLog2(this.columns.low[this.i]!)} to ${signedLog2(this.columns.high[this.i]!)}`
+    return `95 % interval of the log2 ratio ${signed(this.columns.low[this.i]!, 2)} to ${signed(this.columns.high[this.i]!, 2)}`
   }
 
   private get standardError() {

@@ -1,4 +1,4 @@
-import { foldTimes, probability, threeDigits, times } from './numberWords'
+import { foldTimes, threeDigits, times } from '../numeric/numberWords'
 import { ReasonFacts, type Judged, type SideNames } from './reasonFacts'
 import { REASONS, type Reason } from './reasons'
 import type { ComparisonSettings } from './settings'
@@ -25,14 +25,14 @@ const SENTENCES: Record<Reason, (facts: ReasonFacts) => string> = {
     : `Found in ${f.shown.found}, ${f.hiddenPhrase}; but ${f.hidden.name} could not have shown it: it stands only ${times(f.columns.reach[f.i]!)} above ${f.hiddenFloor}, and at least ${times(f.settings.reachLimit)} is asked.`,
   patchyClear: f => `${f.bothFound}. The lowest value of ${f.moreName} is still ${times(f.columns.atLeast[f.i]!)} everything of ${f.lessName}, floors standing for what was not found: at least that much more.`,
   patchy: f => `Patchy: ${f.bothFound}${Number.isNaN(f.columns.atLeast[f.i]!) ? '' : `; the lowest of the one is only ${times(f.columns.atLeast[f.i]!)} the highest of the other, floors included, and at least ${times(Math.max(f.settings.reachLimit, 2 ** f.settings.foldLimit))} is asked`}. Present means at least ${threeDigits(f.settings.presence * 100)} % of a side's preparations.`,
-  moreTested: f => `${f.ratio}; ${f.interval}. q = ${f.q}, at most ${f.settings.alpha} is asked.`,
+  moreTested: f => `${f.ratio}; ${f.interval}. ${f.q}, at most ${f.settings.alpha} is asked.`,
   moreAssumed: f => `${f.ratio}; ${f.assumed}, at least ${foldTimes(f.assumedLimit)} is called more. ${f.interval}.`,
-  levelTested: f => `${f.ratio}; equivalent within ${f.fold} (p = ${probability(f.columns.equivalenceP[f.i]!)}, not adjusted). ${f.interval}.`,
-  levelSmallDifference: f => `${f.ratio}; equivalent within ${f.fold} (p = ${probability(f.columns.equivalenceP[f.i]!)}, not adjusted), and a smaller difference is certain (q = ${f.q}). ${f.interval}.`,
+  levelTested: f => `${f.ratio}; equivalent within ${f.fold} (${f.equivalenceP}, not adjusted). ${f.interval}.`,
+  levelSmallDifference: f => `${f.ratio}; equivalent within ${f.fold} (${f.equivalenceP}, not adjusted), and a smaller difference is certain (${f.q}). ${f.interval}.`,
   levelAssumed: f => `${f.ratio}; ${f.assumed}, this is level within ${f.fold}. ${f.interval}.`,
-  notCertain: f => `${f.ratio}, but not certain: q = ${f.q}, at most ${f.settings.alpha} is asked. ${f.interval}.`,
-  smallNotLevel: f => `${f.ratio}; neither a difference (q = ${f.q}) nor equivalence within ${f.fold} (p = ${probability(f.columns.equivalenceP[f.i]!)}) is shown. ${f.interval}.`,
-  smallButCertain: f => `${f.ratio}; a difference is certain (q = ${f.q}), but whether it reaches ${f.fold} is open. ${f.interval}.`,
+  notCertain: f => `${f.ratio}, but not certain: ${f.q}, at most ${f.settings.alpha} is asked. ${f.interval}.`,
+  smallNotLevel: f => `${f.ratio}; neither a difference (${f.q}) nor equivalence within ${f.fold} (${f.equivalenceP}) is shown. ${f.interval}.`,
+  smallButCertain: f => `${f.ratio}; a difference is certain (${f.q}), but whether it reaches ${f.fold} is open. ${f.interval}.`,
   assumedBetween: f => `${f.ratio}; ${f.assumed}, at least ${foldTimes(f.assumedLimit)} is called more and ${f.assumedLevelPhrase}. ${f.interval}.`,
   noSpread: f => `${f.ratio}, but there is no spread between replicates: the same data twice?`,
   blankOverlap: f => `Found in ${f.shown.found}, ${f.hiddenPhrase}; but ${f.shown.name} holds only ${times(f.shown.level / f.hidden.level)} of what ${f.hidden.name} shows, and at least ${times(f.settings.reachLimit)} is asked.`,

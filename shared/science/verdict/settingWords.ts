@@ -1,4 +1,4 @@
-import { threeDigits, times } from './numberWords'
+import { threeDigits, times } from '../numeric/numberWords'
 import type { ComparisonSettings } from './settings'
 
 /** The settings of a comparison as name and value, in the order of the methods; for exports and for saying what differs. */

@@ -1,4 +1,4 @@
-import { times } from './numberWords'
+import { times } from '../numeric/numberWords'
 import type { SideNames } from './reasonFacts'
 import { REASON } from './reasons'
 import { VERDICTS } from './verdicts'

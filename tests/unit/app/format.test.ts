@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest'
-import { formatCount, formatIntensity, formatMinutes, formatMz, formatPpm } from '../../../app/utils/formatMeasures'
+import { formatCount, formatGain, formatIntensity, formatMinutes, formatMz, formatPpm, formatShare } from '../../../app/utils/formatMeasures'
 import { formatFold, formatLog2, formatProbability, formatTimes } from '../../../app/utils/formatStatistics'
 
 describe('formats of measures', () => {
@@ -19,10 +19,20 @@ describe('formats of measures', () => {
       expect(format(Number.POSITIVE_INFINITY)).toBe('–')
     }
   })
+})
 
-  it('groups thousands', () => {
+describe('formats of counts', () => {
+  it('group thousands', () => {
     expect(formatCount(50_000)).toBe('50\u202F000')
     expect(formatCount(999)).toBe('999')
+  })
+
+  it('give a gain its sign', () => {
+    expect([12, -3400, 0].map(formatGain)).toEqual(['+12', '−3\u202F400', '0'])
+  })
+
+  it('say none only where there is none', () => {
+    expect([[1, 0], [0, 9], [1, 10_000], [44, 1000], [1, 2]].map(([part, whole]) => formatShare(part ?? 0, whole ?? 0))).toEqual(['none', '0 %', '0.1 %', '4.4 %', '50 %'])
   })
 })
 

@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest'
-import { counted, foldTimes, probability, signedLog2, threeDigits, times } from '../../../shared/science/verdict/numberWords'
+import { counted, foldTimes, namedProbability, probability, signed, threeDigits, times } from '../../../shared/science/numeric/numberWords'
 import { REASON, REASON_LABELS, REASONS } from '../../../shared/science/verdict/reasons'
 import { comparisonDefaults } from '../../../shared/science/verdict/settings'
 import { settingWords } from '../../../shared/science/verdict/settingWords'
@@ -13,9 +13,10 @@ describe('numbers in words', () => {
     expect([12.3456, 0.031234, 12_449, 1, 0].map(threeDigits)).toEqual(['12.3', '0.0312', '12400', '1', '0'])
     expect(times(2.5)).toBe('×2.5')
     expect([-2, 2, 0].map(foldTimes)).toEqual(['×4', '×4', '×1'])
-    expect([1.234, -0.5, 0.001, -0.001].map(signedLog2)).toEqual(['+1.23', '−0.50', '0.00', '0.00'])
-    expect([0.0512, 0.001, 0.000_32, 3.24e-17].map(probability)).toEqual(['0.051', '0.001', '3.2 × 10⁻⁴', '3.2 × 10⁻¹⁷'])
-    expect([counted(1, 'feature'), counted(0, 'feature')]).toEqual(['1 feature', '0 features'])
+    expect([1.234, -0.5, 0.001, -0.001].map(value => signed(value, 2))).toEqual(['+1.23', '−0.50', '0.00', '0.00'])
+    expect([0.0512, 0.001, 0.000_32, 3.24e-17, 0].map(probability)).toEqual(['0.051', '0.0010', '3.2e-4', '< 1e-15', '< 1e-15'])
+    expect([0.05, 0].map(q => namedProbability('q', q))).toEqual(['q = 0.050', 'q < 1e-15'])
+    expect([counted(1, 'feature'), counted(0, 'feature'), counted(38_681, 'feature'), counted(2, 'of it', 'of them')]).toEqual(['1 feature', '0 features', '38\u202F681 features', '2 of them'])
   })
 })
 
