@@ -6,20 +6,24 @@ export interface NameGiven { key: string, name: string, before: string | null }
  * had: rows that keep their name come first, then names in the order given. Two samples may swap names in one act.
  */
 export function takenNames(keeping: readonly string[], given: readonly NameGiven[]): Set<string> {
+  const kept = new Set(keeping.map(lower))
+  const firstWith = new Map<string, NameGiven>()
   const refused = new Set<string>()
-  for (let settled = false; !settled;) {
-    settled = true
-    const taken = new Set(keeping.map(lower))
-    for (const { key, before } of given) if (refused.has(key) && before !== null) taken.add(lower(before))
-    for (const { key, name } of given) {
-      if (refused.has(key)) continue
-      if (taken.has(lower(name))) {
-        // A refused row keeps its old name, which another may have counted on: look again from the start.
-        refused.add(key)
-        settled = false
-      }
-      taken.add(lower(name))
-    }
+  const waiting: NameGiven[] = []
+  const refuse = (row: NameGiven) => {
+    if (refused.has(row.key)) return
+    refused.add(row.key)
+    waiting.push(row)
+  }
+  for (const row of given) {
+    const name = lower(row.name)
+    if (kept.has(name) || firstWith.has(name)) refuse(row)
+    else firstWith.set(name, row)
+  }
+  // A refused row keeps its old name, which another may have counted on.
+  for (let row = waiting.pop(); row; row = waiting.pop()) {
+    const other = row.before === null ? undefined : firstWith.get(lower(row.before))
+    if (other) refuse(other)
   }
   return refused
 }
