@@ -32,10 +32,13 @@ export function readUnit(text: string): { time: TimeUnit | null, dalton: boolean
   return { time, dalton: ['da', 'dalton', 'u', 'amu'].includes(words), isUnit: time !== null || otherUnits.has(words) }
 }
 
+/** A longer cell is no title: looking for words in it would take as long as its length squared. */
+const LONGEST_TITLE = 400
 const nothing: HeaderCell = { role: null, rest: '', rank: 0, measure: 'unknown', mass: null, time: null, dalton: false }
 
 /** Reads one header cell: its role, unit, measure, and what is left of it as a name. */
 export function readHeaderCell(cell: string): HeaderCell {
+  if (cell.length > LONGEST_TITLE) return nothing
   const bracket = /^(.*)[([{]([^)\]}]*)[)\]}]\s*(.*)$/s.exec(cell.trim())
   const unit = readUnit(bracket?.[2] ?? '')
   let text = bracket && unit.isUnit ? `${bracket[1] ?? ''} ${bracket[3] ?? ''}`.trim() : cell.trim()

@@ -22,4 +22,9 @@ describe('a header cell', () => {
     '%j belongs to a sample', (text, measure, rest) => expect(readHeaderCell(text)).toMatchObject({ role: 'intensity', measure, rest, rank: 2 }))
 
   it.each(['Press A1', 'Blank mass 1', 'QC1', '', '   ', 'Ölprobe RT 3 b'])('%j says nothing of the trade', text => expect(readHeaderCell(text).role).toBeNull())
+
+  it('that is too long for a title is none, and takes no time', () => {
+    expect(readHeaderCell(`area x${' -'.repeat(100_000)}`).role).toBeNull()
+    expect(readHeaderCell('('.repeat(200_000)).role).toBeNull()
+  })
 })
