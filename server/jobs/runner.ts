@@ -7,6 +7,8 @@ import type { Job, JobContext, JobKind, WorkerMessage } from './kind'
 
 const MAX_ATTEMPTS = 3 // the first, and twice more where the server was killed
 const MAX_WAITING = 3
+/** Far beyond honest work; but the widest tolerances on large tables would take days, and hold up everyone. */
+const MOST_MINUTES = 30
 const PROGRESS_MS = 250
 
 // A runner holds kinds of different inputs; each kind only ever meets its own.
@@ -96,6 +98,7 @@ export class Jobs {
   private listen(job: Job, kind: AnyKind, worker: Worker) {
     let lastProgress = 0
     let kept: { result: unknown } | undefined
+    const limit = setTimeout(() => this.stopLate(job, kind, worker), (kind.mostMinutes ?? MOST_MINUTES) * 60_000)
     worker.on('message', (message: WorkerMessage<unknown>) => {
       if (this.stopped || !this.isRunning(job)) return
       if ('progress' in message) {
@@ -112,12 +115,18 @@ export class Jobs {
     })
     worker.on('error', error => this.fail(job, error))
     worker.on('exit', () => {
+      clearTimeout(limit)
       this.running.delete(job.id)
       if (kept && !this.stopped && this.isRunning(job)) this.keep(job, kind, kept.result)
       kept = undefined
       if (!this.stopped && this.isRunning(job)) this.end(job, 'failed', 'The work ended without a result. Please start it again.')
       this.next()
     })
+  }
+
+  private stopLate(job: Job, kind: AnyKind, worker: Worker) {
+    if (!this.stopped && this.isRunning(job)) this.end(job, 'failed', `Stopped after ${kind.mostMinutes ?? MOST_MINUTES} minutes, so that others get their turn. Nothing of it was kept. Smaller tolerances or fewer tables take less time.`)
+    void worker.terminate()
   }
 
   /** All or nothing: the result and the job's end are one transaction. */

@@ -116,6 +116,16 @@ describe('jobs', () => {
     silence.mockRestore()
   })
 
+  it('are stopped when their time is over, and the next gets its turn', async () => {
+    runner = new Jobs({ db: open.db, folder: open.folder }, { test: { ...kind, mostMinutes: 0.005 } }, { test: worker })
+    const endless = add({ act: 'hang' })
+    await runner.idle()
+    expect(read(endless.id)).toMatchObject({ status: 'failed', message: expect.stringContaining('so that others get their turn') as unknown })
+    expect(abandoned).toHaveLength(1)
+    const next = add({ act: 'double', value: 4 })
+    await vi.waitFor(() => expect(read(next.id)?.attempts).toBe(1), 5000)
+  })
+
   it('may wait three a person, no more', () => {
     for (let n = 0; n < 3; n++) add({ act: 'hang' })
     expect(() => add({ act: 'hang' })).toThrow('Three of your jobs')
