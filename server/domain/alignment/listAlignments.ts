@@ -1,7 +1,7 @@
 import { and, asc, count, countDistinct, desc, eq, inArray, or } from 'drizzle-orm'
 import type { AlignmentLine, AlignmentList } from '../../../shared/types/alignment'
 import type { Database } from '../../db/open'
-import { alignments, alignmentTables, comparisonVersions, jobs, people } from '../../db/schema'
+import { alignments, alignmentTables, comparisons, comparisonVersions, jobs, people } from '../../db/schema'
 import type { Person } from '../person/person'
 import { alignableTables } from './alignableTables'
 import type { AlignInput } from './alignInput'
@@ -19,7 +19,9 @@ export function alignmentLines(db: Database, studyId: string, person: Person, al
     .orderBy(desc(alignments.number)).all()
   const ids = rows.map(row => row.id)
   const tablesOf = new Map(db.select({ id: alignmentTables.alignmentId, n: count() }).from(alignmentTables).where(inArray(alignmentTables.alignmentId, ids)).groupBy(alignmentTables.alignmentId).all().map(row => [row.id, row.n]))
-  const comparisonsOf = new Map(db.select({ id: comparisonVersions.alignmentId, n: countDistinct(comparisonVersions.comparisonId) }).from(comparisonVersions).where(inArray(comparisonVersions.alignmentId, ids)).groupBy(comparisonVersions.alignmentId).all().map(row => [row.id, row.n]))
+  const comparisonsOf = new Map(db.select({ id: comparisonVersions.alignmentId, n: countDistinct(comparisonVersions.comparisonId) }).from(comparisonVersions)
+    .innerJoin(comparisons, eq(comparisons.id, comparisonVersions.comparisonId))
+    .where(and(inArray(comparisonVersions.alignmentId, ids), or(eq(comparisons.practice, false), eq(comparisons.createdBy, person.id)))).groupBy(comparisonVersions.alignmentId).all().map(row => [row.id, row.n]))
   return rows.map(row => ({ ...row, tables: tablesOf.get(row.id) ?? 0, comparisons: comparisonsOf.get(row.id) ?? 0, createdAt: row.createdAt.toISOString() }))
 }
 

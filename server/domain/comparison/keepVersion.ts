@@ -37,7 +37,8 @@ export function keepVersion(db: Database, studyId: string, input: CompareInput, 
     columns: Buffer.from(result.columns.buffer, result.columns.byteOffset, result.columns.byteLength),
     createdBy: personId,
   }).run()
+  // What is called how in practice work stays with its maker.
   if (!input.practice) touchStudy(db, studyId)
-  record(db, { personId, action: number === 1 ? 'make comparison' : 'save version', studyId, subjectId: comparisonId, detail: `${input.title}, version ${number}${input.practice ? ', practice' : ''}` })
+  record(db, { personId, action: number === 1 ? 'make comparison' : 'save version', studyId, subjectId: comparisonId, detail: `${input.practice ? 'practice copy' : input.title}, version ${number}` })
   return comparisonId
 }
