@@ -1,7 +1,7 @@
 import { createReadStream, existsSync } from 'node:fs'
 import { createGunzip } from 'node:zlib'
 import { and, eq } from 'drizzle-orm'
-import type { Readable } from 'node:stream'
+import { pipeline, type Readable } from 'node:stream'
 import type { Database } from '../../db/open'
 import { originals, tables } from '../../db/schema'
 import { DomainError, notFound } from '../DomainError'
@@ -14,9 +14,8 @@ export function openOriginal(db: Database, folder: string, studyId: string, tabl
   if (!table) throw notFound()
   const path = originalPath(folder, table.sha256)
   if (!existsSync(path)) throw new DomainError('notFound', 'The original is not in the data folder any more. Ask the lab lead about a backup.')
-  const file = createReadStream(path)
   const stream = createGunzip()
-  file.on('error', error => stream.destroy(error))
-  file.pipe(stream)
+  // Whichever ends early takes the other along; its receiver hears of an error from the stream itself.
+  pipeline(createReadStream(path), stream, () => {})
   return { fileName: table.fileName, bytes: table.bytes, stream }
 }

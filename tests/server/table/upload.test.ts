@@ -1,8 +1,9 @@
-import { existsSync, mkdirSync, readdirSync, writeFileSync } from 'node:fs'
+import { once } from 'node:events'
+import { existsSync, mkdirSync, readdirSync, readlinkSync, writeFileSync } from 'node:fs'
 import { join } from 'node:path'
 import { buffer } from 'node:stream/consumers'
 import { eq } from 'drizzle-orm'
-import { afterEach, beforeEach, describe, expect, it } from 'vitest'
+import { afterEach, beforeEach, describe, expect, it, vi } from 'vitest'
 import { activity, alignments, alignmentTables, originals, samples, tables, uploads } from '../../../server/db/schema'
 import { DomainError } from '../../../server/domain/DomainError'
 import type { Person } from '../../../server/domain/person/person'
@@ -62,6 +63,25 @@ describe('a clear file', () => {
     expect((['mz', 'retentionMinutes', 'intensity', 'width'] as const).map(name => Array.from(readColumn(laboratory.db, row.id, name)))).toEqual([[100.1, 200.2], [1.5, 2.5], [1000.5, 2000.5], []])
     expect([readWideRows(laboratory.db, row.id).length, row.wideGroup]).toEqual([0, null])
     expect([filesIn('incoming'), filesIn('received'), filesIn('originals')]).toEqual([[], [], [`${row.originalSha256}.gz`]])
+  })
+
+  it('lets go of its original where a download ends half way', async () => {
+    const rows = Array.from({ length: 40_000 }, (_, i) => `${100 + i * 0.0137},${(i * 7919 % 1500) / 100},${(i * 104_729 % 999_983) + 1}`)
+    await upload('x.txt', `m/z,RT (min),Area\n${rows.join('\n')}\n`)
+    const { stream } = openOriginal(laboratory.db, laboratory.folder, studyId, onlyTable().id)
+    await once(stream, 'readable')
+    const pathOf = (descriptor: string) => {
+      try {
+        return readlinkSync(`/proc/self/fd/${descriptor}`)
+      }
+      catch {
+        return ''
+      }
+    }
+    const open = () => readdirSync('/proc/self/fd').map(pathOf).filter(path => path.startsWith(join(laboratory.folder, 'originals')))
+    expect(open()).toHaveLength(1)
+    stream.destroy()
+    await vi.waitFor(() => expect(open()).toEqual([]))
   })
 
   it('gives its original back byte for byte', async () => {

@@ -5,5 +5,5 @@ export default defineRoute(async (event) => {
   const { db, person, study } = await requireStudy(event)
   const { fileName, chunks } = matrixCsv(db, study, readParam(event, 'alignmentId'), person)
   setResponseHeaders(event, { 'content-type': 'text/csv; charset=utf-8', 'content-disposition': `attachment; filename="${fileName}"` })
-  return sendStream(event, Readable.from(chunks))
+  return sendDownload(event, Readable.from(chunks))
 })

@@ -7,5 +7,5 @@ export default defineRoute(async (event) => {
   const { version } = readQueryInput(event, versionQuerySchema)
   const { fileName, chunks } = verdictCsv(db, study, readParam(event, 'comparisonId'), person, version)
   setResponseHeaders(event, { 'content-type': 'text/csv; charset=utf-8', 'content-disposition': `attachment; filename="${fileName}"` })
-  return sendStream(event, Readable.from(chunks))
+  return sendDownload(event, Readable.from(chunks))
 })

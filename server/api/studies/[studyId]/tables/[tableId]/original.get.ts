@@ -6,5 +6,5 @@ export default defineRoute(async (event) => {
   const { fileName, bytes, stream } = openOriginal(db, useLaboratory().folder, study.id, readParam(event, 'tableId'))
   setDownload(event, fileName, 'application/octet-stream')
   setResponseHeader(event, 'content-length', bytes)
-  return sendStream(event, stream)
+  return sendDownload(event, stream)
 })
