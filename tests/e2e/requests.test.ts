@@ -52,6 +52,14 @@ describe('requests that are turned away', () => {
     expect(status).toBe(413)
   })
 
+  it('bodies beyond the limit, whatever the method', async () => {
+    for (const [method, path] of [['PATCH', '/api/me'], ['PUT', '/api/me/password'], ['PATCH', '/api/studies/x/samples'], ['POST', '/api/studies/x/uploads/y']] as const) {
+      const { status, text } = await raw(method, path, { ...json, 'origin': server.url, 'content-length': '2000000' }, 'x'.repeat(2_000_000))
+      expect(status, path).toBe(413)
+      expect(JSON.parse(text)).toMatchObject({ message: expect.stringContaining('smaller parts') as unknown })
+    }
+  })
+
   it('the session routes of the module, which know nothing of our rows', async () => {
     expect((await raw('GET', '/api/_auth/session', {})).status).toBe(404)
     expect((await raw('DELETE', '/api/_auth/session', { origin: server.url })).status).toBe(404)
