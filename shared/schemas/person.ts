@@ -12,7 +12,7 @@ export const passwordSchema = z.string({ error: 'Please type a password.' })
 const typedPassword = z.string({ error: 'Please type your password.' }).min(1, 'Please type your password.').max(200, 'At most 200 characters.')
 
 /** Capitals do not matter in a sign-in name, nor how a letter with an accent was typed. */
-const typedName = z.string({ error: 'Please fill this in.' }).trim().transform(name => name.normalize('NFKC').toLowerCase())
+const typedName = z.string({ error: 'Please fill this in.' }).trim().max(200, 'At most 200 characters.').transform(name => name.normalize('NFKC').toLowerCase())
 const signInName = typedName.pipe(z.string().min(2, 'At least 2 characters.').max(60, 'At most 60 characters.').regex(/^[\p{L}\p{N}._@+-]+$/u, 'Letters, digits and . _ @ + - only.'))
 
 export const signInSchema = z.object({ signInName: typedName.pipe(requiredText(120)), password: typedPassword })

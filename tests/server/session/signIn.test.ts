@@ -27,6 +27,12 @@ afterEach(() => {
 const input = (signInName: string, password: string) => signInSchema.parse({ signInName, password })
 
 describe('signIn', () => {
+  it('does not unfold a name of megabytes', () => {
+    // This sign becomes 18 letters when it is normalised.
+    const { error } = signInSchema.safeParse({ signInName: '\uFDFA'.repeat(200_000), password: PASSWORD })
+    expect(error?.issues).toMatchObject([{ path: ['signInName'], message: 'At most 200 characters.' }])
+  })
+
   it('starts a session that stands for the person and their roles', async () => {
     const { secret } = await signIn(laboratory.db, input(ada.signInName, PASSWORD), testMeans())
     expect(findSessionPerson(laboratory.db, secret)).toEqual(ada)
