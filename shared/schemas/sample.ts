@@ -16,7 +16,8 @@ export type Side = (typeof sides)[number]
 export const amountUnits = ['mg', 'mL'] as const
 export type AmountUnit = (typeof amountUnits)[number]
 
-const positiveOrNull = z.number({ error: 'Not a number.' }).positive('Must be greater than 0.').max(1e9, 'Too large.').nullable()
+/** Bounds far beyond any bench, so that no product or quotient of them is infinite. */
+const positiveOrNull = z.number({ error: 'Not a number.' }).positive('Must be greater than 0.').min(1e-6, 'Too small.').max(1e9, 'Too large.').nullable()
 
 /** What a person may write into one row of the sample sheet. */
 export const sampleSchema = z.object({

@@ -5,6 +5,9 @@ import { TableRefused } from './tableRefused'
 /** A row, or in a wide table a cell, that can't be used: where (line counted from 1, header included), what stood there, and why. */
 export interface RefusedRow { line: number, column: string, value: string, reason: string }
 
+/** Above any detector, and low enough that sums and normalised values stay finite. */
+const MOST_COUNTS = 1e30
+
 /** Collects refused rows; far too many of them mean that the file is read in the wrong way. */
 export class Refusals {
   readonly rows: RefusedRow[] = []
@@ -32,7 +35,7 @@ export function whyNoTime(text: string | undefined, value: number): string | nul
 
 /** Why a cell is no intensity; null where it is one. */
 export function whyNoIntensity(text: string | undefined, value: number): string | null {
-  return whyNoNumber(text, value) ?? (value > 0 ? null : 'an intensity must be above 0')
+  return whyNoNumber(text, value) ?? (value > 0 ? (value < MOST_COUNTS ? null : 'an intensity must lie below 1e30') : 'an intensity must be above 0')
 }
 
 function whyNoNumber(text: string | undefined, value: number): string | null {

@@ -136,9 +136,9 @@ describe('edits', () => {
   })
 
   it('are refused as a whole where one can\'t be read, naming it', () => {
-    const result = sheetChangesSchema.safeParse({ edits: [edit('one', 'amount', null, -1), edit('one', 'side', null, 'C'), edit('one', 'name', 'one', '')] })
+    const result = sheetChangesSchema.safeParse({ edits: [edit('one', 'amount', null, -1), edit('one', 'side', null, 'C'), edit('one', 'name', 'one', ''), edit('one', 'injectionUl', null, 1e-300)] })
     expect(result.error?.issues.map(issue => [issue.path.join('.'), issue.message])).toEqual([
-      ['edits.0.to', 'Must be greater than 0.'], ['edits.1.to', 'A, B or empty.'], ['edits.2.to', 'A sample needs a name.'],
+      ['edits.0.to', 'Must be greater than 0.'], ['edits.1.to', 'A, B or empty.'], ['edits.2.to', 'A sample needs a name.'], ['edits.3.to', 'Too small.'],
     ])
   })
 
