@@ -1,5 +1,5 @@
-/** Addresses that hold a secret: shared pages, invitations, and their API. */
-const SECRET_ADDRESS = /^\/(?:api\/)?(shared|invitations|invitation)\/([^/?#]+)/
+/** Addresses that hold a secret: shared pages, invitations, and their API. Pages are found whatever the case of their address. */
+const SECRET_ADDRESS = /^\/(?:api\/)?(shared|invitations|invitation)\/([^/?#]+)/i
 
 /** The secret an address holds; undefined for every other address. */
 export function secretInAddress(path: string): string | undefined {

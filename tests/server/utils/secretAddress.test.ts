@@ -6,6 +6,7 @@ describe('addresses in a log', () => {
     ['/shared/abc-_123', '/shared/…', 'abc-_123'],
     ['/shared/abc?verdict=level', '/shared/…', 'abc'],
     ['/api/shared/abc/data?x=abc', '/api/shared/…/data', 'abc'],
+    ['/INVITATION/abc', '/INVITATION/…', 'abc'],
     ['/api/invitations/abc', '/api/invitations/…', 'abc'],
   ])('%s is written as %s', (path, written, secret) => {
     expect(addressWithoutSecret(path)).toBe(written)
