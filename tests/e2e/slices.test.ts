@@ -57,6 +57,14 @@ describe('a scientist', () => {
     await page.getByText(/^1 of /).waitFor()
     await page.waitForURL(/flags=artefact/)
 
+    await open(watched, `${bench}?verdict=onlyB`)
+    await page.getByRole('button', { name: /^Flag these \d+$/ }).click()
+    await page.getByLabel('Reason').fill('Asked for one by one.')
+    await page.getByRole('button', { name: /^Flag \d+ features$/ }).click()
+    await page.getByText(/^\d+ flags set\.$/).waitFor()
+    await page.getByRole('button', { name: 'Undo' }).click()
+    await page.getByText(/^\d+ flags taken back\.$/).waitFor()
+
     await open(watched, `${study}/flags`)
     const line = page.getByRole('row').filter({ hasText: 'A shoulder of the peak before it.' })
     expect(await line.innerText()).toContain('Teodor Wray')
