@@ -6,7 +6,7 @@ import type { LayoutAnswers } from '../science/table/layout'
 export const MAX_TABLE_BYTES = 64 * 2 ** 20
 /** Days that a file waits for a person's answer. */
 export const WAITING_DAYS = 14
-/** Under this share of empty cells a column of a wide table seems gap-filled (METHODS 2). */
+/** Under this share of empty cells a column of a wide table seems gap-filled. */
 export const GAP_FILLED_SHARE = 0.01
 
 /** The address's query of an upload: the file's name, and the table that it is to replace. */

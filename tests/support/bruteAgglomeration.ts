@@ -17,7 +17,7 @@ interface PlainCluster {
 }
 
 /**
- * METHODS 5, step 2, by trying every pair at every step: the oracle for the fast one. Features in canonical order.
+ * The second step of grouping, by trying every pair at every step: the oracle for the fast one. Features in canonical order.
  *
  * @returns groups as lists of features, each ascending
  */

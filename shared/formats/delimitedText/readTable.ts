@@ -4,7 +4,7 @@ import { decodeText } from './encoding'
 import { readRows } from './readRows'
 
 /**
- * Reads a table by a decided layout, chunk by chunk, into growing columns (METHODS 2); memory holds the columns and one chunk of text.
+ * Reads a table by a decided layout, chunk by chunk, into growing columns; memory holds the columns and one chunk of text.
  * `expectedRows` is what the survey counted; `onRows` hears how many rows were looked at so far. Throws TableRefused where nothing can be used.
  */
 export async function readTable(chunks: AsyncIterable<Uint8Array>, layout: TableLayout, expectedRows = 0, onRows?: (rows: number) => void): Promise<BuiltColumns> {

@@ -9,7 +9,7 @@ import { stackFeatures, type FeatureStack } from './stack'
 import type { AlignmentProgress, AlignmentResult, FeatureTable } from './types'
 
 /**
- * Finds which features of different tables are the same (METHODS 4 and 5): mass offset and retention drift are taken out by
+ * Finds which features of different tables are the same: mass offset and retention drift are taken out by
  * landmarks shared with a reference table, features are brought into groups, drift is fitted once more to groups that most
  * tables share, and features are brought into groups again. The order of tables and of rows changes nothing but the order
  * in which they are listed.

@@ -9,7 +9,7 @@ export interface WideColumn { group: string, row: Int32Array }
 interface RowSource { columns: number[], rowOf: Map<number, number>, table: FeatureTable }
 
 /**
- * Takes the rows of wide tables as aligned features (METHODS 2): the columns of one file share its rows; several files, and
+ * Takes the rows of wide tables as aligned features: the columns of one file share its rows; several files, and
  * long tables beside them, are matched by the centres of their rows.
  *
  * @param tables as for `align`

@@ -29,7 +29,7 @@ export interface SortedPieces extends Pieces {
   crowdedPieces: number
 }
 
-/** METHODS 5, step 1: a piece with one feature a table, all within tolerance of its centre, is a group. */
+/** First step of grouping: a piece with one feature a table, all within tolerance of its centre, is a group. */
 export function sortPieces(stack: FeatureStack, minutes: Float64Array, settings: AlignmentSettings): SortedPieces {
   const pieces = splitOnGaps(stack.mz, minutes, ascendingOrder(minutes), settings)
   const { items, starts } = pieces
@@ -91,7 +91,7 @@ export function certainGroups({ items, starts, crowded }: SortedPieces): Groups 
   return { items: kept.slice(0, at), starts: keptStarts.slice(0, groups + 1), groups }
 }
 
-/** METHODS 5, step 2: settles the crowded pieces and lists all groups. */
+/** Second step of grouping: settles the crowded pieces and lists all groups. */
 export function settlePieces(
   stack: FeatureStack, minutes: Float64Array, pieces: SortedPieces, settings: AlignmentSettings, onShare: (share: number) => void,
 ): Correspondence {

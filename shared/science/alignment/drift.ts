@@ -1,7 +1,7 @@
 import { interpolate } from '../numeric/interpolate'
 import { lowess } from '../numeric/lowess'
 
-/** Fewer landmarks than this make no drift curve (METHODS 4). */
+/** Fewer landmarks than this make no drift curve. */
 export const fewestLandmarks = 20
 /** At least this share of the landmarks must lie within the retention tolerance of the curve. */
 export const leastShareNear = 0.5

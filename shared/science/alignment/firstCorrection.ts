@@ -5,7 +5,7 @@ import type { AlignmentSettings } from './settings'
 import { compareText } from './stack'
 import type { FeatureTable } from './types'
 
-/** An offset below this is left as it is, ppm (METHODS 4). */
+/** An offset below this is left as it is, ppm. */
 export const leastOffsetPpm = 1
 /** Fewer landmarks than this say nothing of an offset. */
 export const fewestForOffset = 5
@@ -40,7 +40,7 @@ export function pickReference(tables: readonly FeatureTable[], referenceDigest: 
   return candidates[0] ?? -1
 }
 
-/** METHODS 4, first round: each table against the reference by landmarks. */
+/** First round of correction: each table against the reference by landmarks. */
 export function firstCorrections(
   tables: readonly FeatureTable[], reference: number, settings: AlignmentSettings, onShare: (share: number) => void,
 ): Correction[] {

@@ -3,7 +3,7 @@ import { select } from '../numeric/select'
 import type { AlignmentSettings } from './settings'
 import type { FeatureTable } from './types'
 
-/** How many of a table's most intense features may become landmarks (METHODS 4). */
+/** How many of a table's most intense features may become landmarks. */
 export const landmarkFeatures = 1500
 
 /** The most intense features of a table, ascending by m/z. */

@@ -3,7 +3,7 @@ import { median } from '../numeric/median'
 import type { Groups } from './correspondence'
 import type { FeatureStack } from './stack'
 
-/** Most groups that a table is fitted to (METHODS 4). */
+/** Most groups that a table is fitted to. */
 export const mostConsensusGroups = 2000
 /** With this many that splitting alone made, crowded pieces need not be settled to refine the times. */
 export const enoughConsensusGroups = 1000

@@ -6,7 +6,7 @@ import type { AlignmentSettings } from './settings'
 import type { FeatureStack } from './stack'
 
 /**
- * METHODS 4, second round: each table with a curve of its own, and the reference, is fitted once more to the median times of
+ * Second round of correction: each table with a curve of its own, and the reference, is fitted once more to the median times of
  * widely shared groups; who borrowed a curve takes over the new one. A table whose landmarks carried no curve stays as it is:
  * its features in shared groups lie within tolerance by themselves and would confirm anything.
  *

@@ -1,4 +1,4 @@
-/** Settings of an alignment (METHODS 1, 4, 5); stored with its result and never changed afterwards. */
+/** Settings of an alignment; stored with its result and never changed afterwards. */
 export interface AlignmentSettings {
   /** Between-table mass tolerance, ppm. */
   alignMassPpm: number

@@ -19,7 +19,7 @@ export const mostRefusals = 16
 
 /**
  * Settles the piece loaded in `bench.clusters` by agglomeration: again and again the two clusters with the closest centres
- * that may merge do (METHODS 5). First the features that stand alone or are the most intense of their table within
+ * that may merge do. First the features that stand alone or are the most intense of their table within
  * tolerance, then the rest. A pair refused for crossing another group stays refused until one of the two changes.
  *
  * @param intensity of each loaded feature

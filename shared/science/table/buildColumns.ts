@@ -27,7 +27,7 @@ export interface BuiltColumns {
   skipped: Record<SkippedKind, number>
 }
 
-/** Turns rows of text into columns of numbers, one row at a time, by a decided layout (METHODS 2). Times become minutes; what can't be used is refused with line, column and reason. */
+/** Turns rows of text into columns of numbers, one row at a time, by a decided layout. Times become minutes; what can't be used is refused with line, column and reason. */
 export class ColumnBuilder {
   private readonly mz: GrowingFloats
   private readonly minutes: GrowingFloats

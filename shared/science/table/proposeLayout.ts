@@ -12,7 +12,7 @@ const LONGEST_RUN_MINUTES = 100
 const SHORTEST_RUN_SECONDS = 60
 
 /**
- * Proposes how a file is read from what the survey of it found and what a person has said (METHODS 2). Pure: called again after each answer,
+ * Proposes how a file is read from what the survey of it found and what a person has said. Pure: called again after each answer,
  * by the server and by the page. `remembered` says that the answers come from an earlier file of the same shape: what this file proves then holds against them.
  */
 export function proposeLayout(survey: TableSurvey, answers: LayoutAnswers = {}, remembered = false): TableProposal {

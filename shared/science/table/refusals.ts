@@ -23,7 +23,7 @@ export class Refusals {
   }
 }
 
-/** Why a cell is no m/z; null where it is one. The limits are those of METHODS 2. */
+/** Why a cell is no m/z; null where it is one. */
 export function whyNoMz(text: string | undefined, value: number): string | null {
   return whyNoNumber(text, value) ?? (value > 0 && value < 1e5 ? null : 'm/z must lie above 0 and below 100\u202F000')
 }

@@ -8,7 +8,7 @@ export interface RatioOutcome {
 
 const more = (log2Ratio: number) => log2Ratio < 0 ? VERDICT.moreA : VERDICT.moreB
 
-/** Fourth rule of METHODS 9 with replicates: a tested ratio, its q, and p of equivalence within ± foldLimit (NaN: not equivalent). */
+/** Fourth rule of verdicts with replicates: a tested ratio, its q, and p of equivalence within ± foldLimit (NaN: not equivalent). */
 export function testedRatio(log2Ratio: number, q: number, equivalenceP: number, foldLimit: number, alpha: number): RatioOutcome {
   const certain = q <= alpha
   if (Math.abs(log2Ratio) >= foldLimit) {

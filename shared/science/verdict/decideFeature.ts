@@ -19,7 +19,7 @@ export interface Deciding {
 }
 
 /**
- * The first rules of METHODS 9 for one feature, the first that holds: in neither side, set aside, one side present, patchy.
+ * The first rules of verdicts for one feature, the first that holds: in neither side, set aside, one side present, patchy.
  * Gives true where none of them does: both sides are present, and their ratio decides.
  */
 export function decideFeature(deciding: Deciding, i: number): boolean {

@@ -11,7 +11,7 @@ import { VERDICT } from './verdicts'
 export type RatioCounts = Pick<VerdictResult, 'testedFeatures' | 'assumedFeatures' | 'chanceMore' | 'nothingCanBeLevel'>
 
 /**
- * The fourth rule of METHODS 9, for the features whose both sides are present: tested where each side has two detecting preparations
+ * The fourth rule of verdicts, for the features whose both sides are present: tested where each side has two detecting preparations
  * or more, else judged by assumed precision. Only here stand p, q and intervals.
  */
 export function decideRatios(deciding: Deciding, bothPresent: readonly number[]): RatioCounts {

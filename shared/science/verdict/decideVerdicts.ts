@@ -9,7 +9,7 @@ import { emptyColumns, type VerdictColumns, type VerdictResult } from './verdict
 import { VERDICTS, type Verdict } from './verdicts'
 
 /**
- * Second of two stages: applies the limits to a summary and gives every feature its verdict and reason (METHODS 9, 10).
+ * Second of two stages: applies the limits to a summary and gives every feature its verdict and reason.
  * Quick enough to run at every change of a limit; the same function serves the page's preview and the saved version.
  */
 export function decideVerdicts(summary: SideSummary, settings: ComparisonSettings): VerdictResult {

@@ -16,7 +16,7 @@ export function isUnprovable(sample: Pick<ComparedSample, 'gapFilled' | 'floorSo
   return sample.gapFilled && sample.floorSource === 'estimated'
 }
 
-/** Floors of a side; a floor is at least the intensity limit (METHODS 3, 8). */
+/** Floors of a side; a floor is at least the intensity limit. */
 export function sideFloors(summary: SideSummary, side: 'A' | 'B', intensityLimit: number | null): SideFloors {
   const limit = intensityLimit ?? 0
   const floorOf = (index: number) => {

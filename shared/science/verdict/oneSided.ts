@@ -12,7 +12,7 @@ export interface OneSidedOutcome {
 }
 
 /**
- * Second rule of METHODS 9: one side present, the other not found. `blankCountsAsFloor` where the other side was detected but
+ * Second rule of verdicts: one side present, the other not found. `blankCountsAsFloor` where the other side was detected but
  * is not above blank: the blank's level then stands for its floor, and the present side must also stand reachLimit times
  * above what the other shows, or a limit crossed by a hair would make a one-sided feature of two like ones.
  */

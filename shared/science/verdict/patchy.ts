@@ -12,7 +12,7 @@ export interface PatchyOutcome {
 }
 
 /**
- * Third rule of METHODS 9: one side present, the other patchy. Clear where the lowest value of the present side stands
+ * Third rule of verdicts: one side present, the other patchy. Clear where the lowest value of the present side stands
  * max(reachLimit, 2^foldLimit) times above everything on the other, floors standing for what was not found there.
  */
 export function patchy(summary: SideSummary, settings: ComparisonSettings, i: number, present: 'A' | 'B' | null, floors: { A: SideFloors, B: SideFloors }): PatchyOutcome {

@@ -8,7 +8,7 @@ const NOT_SET_ASIDE = -1
 /** The reason code for which a feature is set aside, or -1. */
 export type SetAsideRule = (feature: number) => number
 
-/** Makes the first rule of METHODS 9: sent to waste, below the intensity limit, blank-borne, by hand. */
+/** Makes the first rule of verdicts, set aside: sent to waste, below the intensity limit, blank-borne, by hand. */
 export function setAsideRule(summary: SideSummary, settings: ComparisonSettings): SetAsideRule {
   const byHand = new Set(settings.setAsideByHand.map(({ index }) => index))
   const { divertWindows, intensityLimit, blankRatio } = settings

@@ -24,7 +24,7 @@ export interface ComparedSample {
   measure: Measure
 }
 
-/** Limits and choices of a comparison (METHODS 6 to 10). */
+/** Limits and choices of a comparison. */
 export interface ComparisonSettings {
   normaliseByAmount: boolean
   blankRatio: number

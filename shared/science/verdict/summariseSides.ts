@@ -7,7 +7,7 @@ import type { SideInput, SideSummary, SummarisedSide } from './sideSummary'
 import { preparationLog2, sideStatistics, type SideStatistics } from './sideStatistics'
 
 /**
- * First of two stages: normalises (METHODS 6.1, 6.2), averages injections of one preparation in log2, and gathers per feature
+ * First of two stages: normalises, averages injections of one preparation in log2, and gathers per feature
  * what no limit changes. The order of the samples does not matter; swapping the sides mirrors the result.
  * @throws CannotCompare where a side has nothing to compare, or amounts in mg and mL are mixed
  */
