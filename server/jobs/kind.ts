@@ -24,6 +24,10 @@ export interface JobKind<Input, Result> {
   abandon?: (context: JobContext, input: Input, reason: string, job: Job) => void
 }
 
+/** Any kind, for who holds several: each kind only ever meets its own input and result. */
+// eslint-disable-next-line @typescript-eslint/no-explicit-any
+export type AnyJobKind = JobKind<any, any>
+
 /** What a worker may post: progress as often as it likes (the runner thins it), then one result or refusal. */
 export type WorkerMessage<Result> =
   | { progress: number, message: string }

@@ -3,17 +3,13 @@ import { Worker } from 'node:worker_threads'
 import { and, asc, eq, inArray } from 'drizzle-orm'
 import { jobs } from '../db/schema'
 import { DomainError } from '../domain/DomainError'
-import type { Job, JobContext, JobKind, WorkerMessage } from './kind'
+import type { AnyJobKind, Job, JobContext, WorkerMessage } from './kind'
 
 const MAX_ATTEMPTS = 3 // the first, and twice more where the server was killed
 const MAX_WAITING = 3
 /** Far beyond honest work; but the widest tolerances on large tables would take days, and hold up everyone. */
 const MOST_MINUTES = 30
 const PROGRESS_MS = 250
-
-// A runner holds kinds of different inputs; each kind only ever meets its own.
-// eslint-disable-next-line @typescript-eslint/no-explicit-any
-type AnyKind = JobKind<any, any>
 
 export interface NewJob { kind: string, studyId: string | null, input: unknown, personId: string }
 
@@ -25,7 +21,7 @@ export class Jobs {
 
   constructor(
     private readonly context: JobContext,
-    private readonly kinds: Record<string, AnyKind>,
+    private readonly kinds: Record<string, AnyJobKind>,
     private readonly workerSources: Record<string, string>,
   ) {}
 
@@ -95,7 +91,7 @@ export class Jobs {
     }
   }
 
-  private listen(job: Job, kind: AnyKind, worker: Worker) {
+  private listen(job: Job, kind: AnyJobKind, worker: Worker) {
     let lastProgress = 0
     let kept: { result: unknown } | undefined
     const limit = setTimeout(() => this.stopLate(job, kind, worker), (kind.mostMinutes ?? MOST_MINUTES) * 60_000)
@@ -130,7 +126,7 @@ export class Jobs {
   }
 
   /** All or nothing: the result and the job's end are one transaction. */
-  private keep(job: Job, kind: AnyKind, result: unknown) {
+  private keep(job: Job, kind: AnyJobKind, result: unknown) {
     const { db } = this.context
     try {
       db.transaction(() => {

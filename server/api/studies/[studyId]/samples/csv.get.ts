@@ -3,6 +3,6 @@ import { readSheet } from '../../../../domain/sample/readSheet'
 
 export default defineRoute(async (event) => {
   const { db, study } = await requireStudy(event, 'export')
-  setResponseHeaders(event, { 'content-type': 'text/csv; charset=utf-8', 'content-disposition': 'attachment; filename="sample-sheet.csv"' })
+  setDownload(event, 'sample-sheet.csv', 'text/csv; charset=utf-8')
   return writeSheet(readSheet(db, study.id).samples)
 })

@@ -4,6 +4,6 @@ import { matrixCsv } from '../../../../../domain/alignment/matrixCsv'
 export default defineRoute(async (event) => {
   const { db, person, study } = await requireStudy(event)
   const { fileName, chunks } = matrixCsv(db, study, readParam(event, 'alignmentId'), person)
-  setResponseHeaders(event, { 'content-type': 'text/csv; charset=utf-8', 'content-disposition': `attachment; filename="${fileName}"` })
+  setDownload(event, fileName, 'text/csv; charset=utf-8')
   return sendDownload(event, Readable.from(chunks))
 })

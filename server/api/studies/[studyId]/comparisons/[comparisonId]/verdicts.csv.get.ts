@@ -6,6 +6,6 @@ export default defineRoute(async (event) => {
   const { db, person, study } = await requireStudy(event)
   const { version } = readQueryInput(event, versionQuerySchema)
   const { fileName, chunks } = verdictCsv(db, study, readParam(event, 'comparisonId'), person, version)
-  setResponseHeaders(event, { 'content-type': 'text/csv; charset=utf-8', 'content-disposition': `attachment; filename="${fileName}"` })
+  setDownload(event, fileName, 'text/csv; charset=utf-8')
   return sendDownload(event, Readable.from(chunks))
 })
