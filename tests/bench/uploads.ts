@@ -92,6 +92,10 @@ async function main() {
     console.log(`memory: ${idle.toFixed(0)} MB idle, ${(sentPeak - idle).toFixed(0)} MB above it while sending, ${(peak - idle).toFixed(0)} MB at its peak (limit 150)`)
     console.log(`other reads: ${reads.length}, median ${quantile(reads, 0.5).toFixed(1)} ms (limit 50), 95 % within ${quantile(reads, 0.95).toFixed(1)} ms, longest ${Math.max(...reads).toFixed(0)} ms; idle median ${quantile(idleReads, 0.5).toFixed(1)} ms`)
   }
+  catch (error) {
+    console.error(server.output().slice(-4000))
+    throw error
+  }
   finally {
     await server.stop()
     rmSync(folder, { recursive: true, force: true })
