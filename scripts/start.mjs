@@ -16,8 +16,8 @@ export function prepare() {
 
 function serve(kind) {
   prepare()
-  // Worker threads come and go: without a limit the C library keeps a pool of memory for each.
-  const env = { NITRO_SHUTDOWN_TIMEOUT: '3000', MALLOC_ARENA_MAX: '2', ...process.env, STEELYARD_KIND: kind, NODE_ENV: 'production' }
+  // Worker threads and their large columns come and go: the C library would keep a pool for each thread, and freed columns too.
+  const env = { NITRO_SHUTDOWN_TIMEOUT: '3000', MALLOC_ARENA_MAX: '2', MALLOC_MMAP_THRESHOLD_: '1048576', ...process.env, STEELYARD_KIND: kind, NODE_ENV: 'production' }
   env.NITRO_HOST = env.HOST = process.env.STEELYARD_HOST || '127.0.0.1'
   env.NITRO_PORT = env.PORT = process.env.PORT || '3000'
   // Browsers keep a Secure cookie on this machine's own names; elsewhere plain HTTP would lose it.

@@ -17,7 +17,7 @@ export interface ReadInput {
 /** Reads one uploaded file: into tables, into the list of files that wait for an answer, or not at all. */
 export const read: JobKind<ReadInput, ReadUpload> = {
   worker: 'read',
-  heapMb: 64,
+  heapMb: 48,
   youngHeapMb: 2,
   prepare({ db, folder }, { uploadId, decided }) {
     const upload = db.select().from(uploads).where(eq(uploads.id, uploadId)).get()

@@ -15,7 +15,7 @@ export async function startBuiltServer({ kind = 'lab', folder = '', env = {} }: 
   const port = await freePort()
   let output = ''
   const child = spawn(process.execPath, [entry], {
-    env: { MALLOC_ARENA_MAX: '2', ...process.env, NODE_ENV: 'production', HOST: '127.0.0.1', NITRO_HOST: '127.0.0.1', PORT: String(port), NITRO_PORT: String(port), NITRO_SHUTDOWN_TIMEOUT: '2000', STEELYARD_KIND: kind, STEELYARD_DATA: data, ...env },
+    env: { MALLOC_ARENA_MAX: '2', MALLOC_MMAP_THRESHOLD_: '1048576', ...process.env, NODE_ENV: 'production', HOST: '127.0.0.1', NITRO_HOST: '127.0.0.1', PORT: String(port), NITRO_PORT: String(port), NITRO_SHUTDOWN_TIMEOUT: '2000', STEELYARD_KIND: kind, STEELYARD_DATA: data, ...env },
   })
   child.stdout.on('data', (chunk: Buffer) => output += chunk)
   child.stderr.on('data', (chunk: Buffer) => output += chunk)
