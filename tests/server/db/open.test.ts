@@ -39,7 +39,7 @@ describe('openDatabase', () => {
 
   it('keeps activity append-only', async () => {
     open = await openTestLaboratory()
-    record(open.db, { personId: null, action: 'test' })
+    record(open.db, { personId: null, action: 'try log' })
     expect(() => open.db.delete(activity).run()).toThrow('append-only')
     expect(() => open.db.update(activity).set({ action: 'other' }).run()).toThrow('append-only')
     expect(open.db.select().from(activity).all()).toHaveLength(1)

@@ -42,7 +42,7 @@ describe('flagged features of a study', () => {
 
   it('stand with their place where nothing was compared yet', async () => {
     flag(addTestAlignment(laboratory, studyId, scientist.id), [4])
-    expect(await seen(scientist)).toEqual([{ featureIndex: 4, mz: 204, retentionMinutes: 204, phrase: null, version: null, practice: false }])
+    expect(await seen(scientist)).toEqual([{ featureIndex: 4, mz: 204, retentionMinutes: 5, phrase: null, version: null, practice: false }])
   })
 
   it('of practice are seen by its maker alone, and practice verdicts do not stand for official ones', async () => {
