@@ -120,7 +120,7 @@ export class Jobs {
     })
   }
 
-  private stopLate(job: Job, kind: AnyKind, worker: Worker) {
+  private stopLate(job: Job, kind: AnyJobKind, worker: Worker) {
     if (!this.stopped && this.isRunning(job)) this.end(job, 'failed', `Stopped after ${kind.mostMinutes ?? MOST_MINUTES} minutes, so that others get their turn. Nothing of it was kept. Smaller tolerances or fewer tables take less time.`)
     void worker.terminate()
   }
