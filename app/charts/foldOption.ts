@@ -41,7 +41,7 @@ export function foldOption({ points, series, settings, names, palette, hint, nar
       ...[1, 2].map((gridIndex): XAXisComponentOption => ({ ...axis(palette), type: 'value', gridIndex, scale: true, axisLabel: { show: false }, axisTick: { show: false }, splitLine: { show: false }, name: `only ${gridIndex === 1 ? 'A' : 'B'}`, nameLocation: 'middle', nameGap: 8, nameTextStyle: { ...text, color: gridIndex === 1 ? palette.sideA : palette.sideB } })),
     ],
     yAxis: [
-      { ...ratioAxis(points, palette), ...(zoom ? { min: zoom.y[0], max: zoom.y[1] } : {}) },
+      { ...ratioAxis(points, palette, narrow), ...(zoom ? { min: zoom.y[0], max: zoom.y[1] } : {}) },
       ...[1, 2].map((gridIndex): YAXisComponentOption => ({ ...axis(palette), type: 'value', gridIndex, min: reach[0], max: reach[1], interval: 1, position: gridIndex === 1 ? 'left' : 'right', splitLine: { show: false }, axisLabel: { ...text, show: !narrow, formatter: reachLabel }, axisTick: { show: !narrow }, name: 'reach', nameTextStyle: text, nameGap: 10 })),
     ],
     tooltip: {
@@ -77,12 +77,12 @@ function axis(palette: Palette) {
   return { axisLine: { show: false, onZero: false }, axisTick: { lineStyle: { color: palette.hairline } }, splitLine: { lineStyle: { color: palette.hairline, opacity: 0.6 } }, minorTick: { show: false } }
 }
 
-function ratioAxis(points: FoldPoints, palette: Palette): YAXisComponentOption {
+function ratioAxis(points: FoldPoints, palette: Palette, narrow: boolean): YAXisComponentOption {
   const text = { fontFamily: fonts.text, color: palette.muted, fontSize: 12 }
   const common = { ...axis(palette), type: 'value' as const, gridIndex: 0, nameTextStyle: { ...text, align: 'left' as const }, nameGap: 10 }
   if (points.kind === 'certainty') {
     const min = points.untested > 0 ? -0.8 : 0
-    return { ...common, name: 'certainty, −log10 q', min, max: Math.max(2, Math.min(MOST_CERTAIN + 0.5, Math.ceil(points.highest * 1.05))), axisLabel: { ...text, formatter: (value: number) => value < 0 ? 'no test' : value === MOST_CERTAIN ? '15 or more' : String(value) } }
+    return { ...common, name: 'certainty, −log10 q', min, max: Math.max(2, Math.min(MOST_CERTAIN + 0.5, Math.ceil(points.highest * 1.05))), axisLabel: { ...text, formatter: (value: number) => value < 0 ? (narrow ? '' : 'no test') : value === MOST_CERTAIN ? '15 or more' : String(value) } }
   }
   return { ...common, name: 'abundance', min: Math.floor(orZero(points.lowest)), max: Math.ceil(orZero(points.highest)) + 0.1, interval: 1, axisLabel: { ...text, formatter: (value: number) => Number.isInteger(value) ? powerOfTen(value) : '' } }
 }

@@ -21,7 +21,11 @@ export function useBenchAddress() {
   })
   const stepped = () => JSON.stringify([bench.verdicts, bench.flags, bench.sort])
   let before = stepped()
+  // What was done last on a bench must not land in the address of the page after it.
+  let left = false
+  onScopeDispose(() => left = true)
   const write = useDebounceFn(() => {
+    if (left) return
     const query = viewToQuery(bench.$state)
     ours = textOf(query)
     if (ours === textOf(route.query)) return

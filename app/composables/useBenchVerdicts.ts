@@ -1,3 +1,4 @@
+import { CannotCompare } from '#shared/science/normalisation/cannotCompare'
 import { decideVerdicts } from '#shared/science/verdict/decideVerdicts'
 import type { ComparisonSettings } from '#shared/science/verdict/settings'
 import type { SideSummary } from '#shared/science/verdict/sideSummary'
@@ -14,6 +15,7 @@ export function useBenchVerdicts(source: () => BenchSource) {
   const saved = shallowRef<VerdictResult | null>(null)
   const data = shallowRef<ComparisonData | null>(null)
   const problem = ref('')
+  const previewProblem = ref('')
   const preview = shallowRef<{ settings: ComparisonSettings, result: VerdictResult } | null>(null)
   let summary: SideSummary | null = null
 
@@ -37,17 +39,22 @@ export function useBenchVerdicts(source: () => BenchSource) {
 
   /** Judges anew under these settings, unsaved; null goes back to what is saved. */
   function previewWith(settings: ComparisonSettings | null) {
-    if (!settings || !data.value) {
-      preview.value = null
-      return
+    previewProblem.value = ''
+    preview.value = null
+    if (!settings || !data.value) return
+    try {
+      const { normaliseByAmount } = settings
+      if (summary?.normaliseByAmount !== normaliseByAmount) summary = summariseSides({ ...data.value, normaliseByAmount })
+      preview.value = { settings, result: decideVerdicts(summary, settings) }
     }
-    const { normaliseByAmount } = settings
-    if (summary?.normaliseByAmount !== normaliseByAmount) summary = summariseSides({ ...data.value, normaliseByAmount })
-    preview.value = { settings, result: decideVerdicts(summary, settings) }
+    catch (error) {
+      if (!(error instanceof CannotCompare)) throw error
+      previewProblem.value = error.message
+    }
   }
 
   return {
-    saved, data, preview, problem, previewWith,
+    saved, data, preview, previewProblem, problem, previewWith,
     result: computed(() => preview.value?.result ?? saved.value),
     settings: computed(() => preview.value?.settings ?? source().version.settings),
     names: computed(() => ({ a: source().version.sideAName, b: source().version.sideBName })),

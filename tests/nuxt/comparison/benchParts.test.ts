@@ -1,0 +1,100 @@
+import { mountSuspended } from '@nuxt/test-utils/runtime'
+import { beforeEach, describe, expect, it } from 'vitest'
+import BalanceBar from '~/components/comparison/BalanceBar.vue'
+import FeatureCard from '~/components/comparison/FeatureCard.vue'
+import FeatureTable from '~/components/comparison/FeatureTable.vue'
+import SettingsPanel from '~/components/comparison/SettingsPanel.vue'
+import { VERDICT } from '#shared/science/verdict/verdicts'
+import { benchDefaults } from '~/utils/benchView'
+import { manyVerdicts } from '../../support/manyFeatures'
+
+const names = { a: 'Millrace', b: 'Tallow Lane' }
+const many = manyVerdicts(500)
+const rows = Int32Array.from({ length: 500 }, (_, i) => i)
+beforeEach(() => useBenchStore().show(benchDefaults))
+
+describe('the balance bar', () => {
+  it('filters by a part and says that it does', async () => {
+    const bar = await mountSuspended(BalanceBar, { props: { counts: many.result.counts, names, foldLimit: 1 } })
+    const part = bar.findAll('button').find(button => button.text().includes('found only in Tallow Lane'))
+    expect(part?.text()).toContain(String(many.result.counts.onlyB))
+    await part?.trigger('click')
+    expect(useBenchStore().verdicts).toEqual(['onlyB'])
+    expect(part?.attributes('aria-pressed')).toBe('true')
+  })
+
+  it('shows what a preview moves', async () => {
+    const before = { ...many.result.counts, onlyA: 1000 }
+    const bar = await mountSuspended(BalanceBar, { props: { counts: many.result.counts, before, names, foldLimit: 1 } })
+    expect(bar.text()).toContain(`1\u202F000 → ${many.result.counts.onlyA}`)
+  })
+})
+
+describe('the feature table', () => {
+  const props = { result: many.result, rows, selectedRow: -1, foldLimit: 1, names, flags: new Map() }
+
+  it('is a grid that knows how many rows there are, with only those in view', async () => {
+    const table = await mountSuspended(FeatureTable, { props, attachTo: document.body })
+    const grid = table.get('[role=grid]')
+    expect(grid.attributes('aria-rowcount')).toBe('501')
+    expect(table.findAll('[role=row]').length).toBeLessThan(60)
+  })
+
+  it('sorts by a column, and the other way round the second time', async () => {
+    const table = await mountSuspended(FeatureTable, { props })
+    const header = table.findAll('[role=columnheader]').find(cell => cell.text() === 'm/z')
+    await header?.get('button').trigger('click')
+    expect(header?.attributes('aria-sort')).toBe('ascending')
+    await header?.get('button').trigger('click')
+    expect(useBenchStore().sort).toEqual({ key: 'mz', descending: true })
+  })
+
+  it('steps by keys', async () => {
+    const table = await mountSuspended(FeatureTable, { props })
+    const grid = table.get('[role=grid]')
+    for (const key of ['ArrowDown', 'ArrowUp', 'End', 'Home']) await grid.trigger('keydown', { key })
+    expect(table.emitted('step')).toEqual([[1], [-1]])
+    expect(table.emitted('edge')).toEqual([[true], [false]])
+  })
+})
+
+describe('the feature card', () => {
+  it('gives the verdict in words, its reason with numbers, and values per sample', async () => {
+    const feature = many.result.columns.verdict.indexOf(VERDICT.onlyA)
+    const card = await mountSuspended(FeatureCard, { props: { feature, result: many.result, data: many.input, settings: many.settings, names } })
+    expect(card.text()).toContain('found only in Millrace')
+    expect(card.text()).toMatch(/It stands ×[\d.]+ above the highest floor of Tallow Lane/)
+    expect(card.get('[role=img]').attributes('aria-label')).toContain('Tallow Lane: found in 0 of 3')
+  })
+
+  it('never prints what is no number', async () => {
+    for (let feature = 0; feature < 60; feature++) {
+      const card = await mountSuspended(FeatureCard, { props: { feature, result: many.result, data: null, settings: many.settings, names } })
+      expect(card.text()).not.toMatch(/NaN|Infinity|undefined/)
+    }
+  })
+})
+
+describe('the settings panel', () => {
+  const props = { saved: many.settings, mayPreview: true, maySave: true, busy: false, problem: '', draft: null }
+
+  it('passes a changed limit on as a draft and offers to save it', async () => {
+    const panel = await mountSuspended(SettingsPanel, { props })
+    const fold = panel.findAll('label').find(label => label.text() === 'Fold limit')
+    await panel.get(`[id="${fold?.attributes('for')}"]`).setValue('4')
+    expect(panel.emitted('update:draft')?.at(-1)).toEqual([{ ...many.settings, foldLimit: 2 }])
+  })
+
+  it('keeps a wrong value to itself, with the range', async () => {
+    const panel = await mountSuspended(SettingsPanel, { props })
+    const alpha = panel.findAll('label').find(label => label.text() === 'Alpha')
+    await panel.get(`[id="${alpha?.attributes('for')}"]`).setValue('7')
+    expect(panel.emitted('update:draft')).toBeUndefined()
+    expect(panel.text()).toContain('From 0.000001 to 0.5.')
+  })
+
+  it('has no save where the person may not', async () => {
+    const panel = await mountSuspended(SettingsPanel, { props: { ...props, maySave: false } })
+    expect(panel.text()).not.toContain('Save as a new version')
+  })
+})
