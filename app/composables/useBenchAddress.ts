@@ -16,11 +16,14 @@ export function useBenchAddress() {
   let ours = ''
   const textOf = (query: Query | typeof route.query) => KEYS.map(key => query[key] ?? '').join('\n')
 
-  watch(() => textOf(route.query), (text) => {
-    if (text !== ours) bench.show(queryToView(route.query))
-  })
   const stepped = () => JSON.stringify([bench.verdicts, bench.flags, bench.sort])
   let before = stepped()
+  watch(() => textOf(route.query), (text) => {
+    if (text === ours) return
+    ours = text
+    bench.show(queryToView(route.query))
+    before = stepped()
+  })
   // What was done last on a bench must not land in the address of the page after it.
   let left = false
   onScopeDispose(() => left = true)
