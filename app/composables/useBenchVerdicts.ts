@@ -7,6 +7,9 @@ import type { ComparisonData } from '#shared/formats/comparisonData'
 import type { VerdictResult } from '#shared/science/verdict/verdictResult'
 import type { BenchSource } from '~/utils/benchSource'
 
+/** Lets the plot and the first rows be drawn before more is read. */
+const idle = () => new Promise<void>(resolve => 'requestIdleCallback' in window ? window.requestIdleCallback(() => resolve(), { timeout: 1000 }) : setTimeout(resolve, 200))
+
 /**
  * The verdicts a bench shows: those saved with the version, or a preview under other limits, made by the same functions the
  * server uses. Loaded in the browser only; the intensities follow when the verdicts stand.
@@ -27,6 +30,8 @@ export function useBenchVerdicts(source: () => BenchSource) {
     try {
       const verdicts = await asked.loadVerdicts()
       if (isStill()) saved.value = verdicts
+      await idle()
+      if (!isStill()) return
       const loaded = await asked.loadData?.() ?? null
       if (isStill()) data.value = loaded
     }

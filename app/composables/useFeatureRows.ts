@@ -1,7 +1,7 @@
 import type { SideNames } from '#shared/science/verdict/reasonFacts'
 import type { VerdictResult } from '#shared/science/verdict/verdictResult'
 import { verdictPhrase } from '#shared/science/verdict/verdictPhrase'
-import { filterFeatures, rowOfFeature } from '~/utils/featureFilter'
+import { filterFeatures, inOrder, rowOfFeature } from '~/utils/featureFilter'
 import { orderFeatures } from '~/utils/featureOrder'
 import { parseSearch } from '~/utils/featureSearch'
 
@@ -14,16 +14,18 @@ export function useFeatureRows(result: () => VerdictResult | null, names: () => 
     const columns = result()?.columns
     return columns ? orderFeatures(columns, { ...bench.sort }) : none
   })
-  const rows = computed(() => {
+  // Kept apart from the order, so that sorting does not draw the plot anew.
+  const passing = computed(() => {
     const columns = result()?.columns
     if (!columns) return none
-    return filterFeatures(columns, order.value, {
+    return filterFeatures(columns, orderFeatures(columns, { key: 'number', descending: false }), {
       verdicts: [...bench.verdicts],
       flagged: bench.flags !== 'all' ? flagged() : null,
       search: parseSearch(bench.find, bench.massPpm),
       said: i => verdictPhrase(columns.verdict[i] ?? 0, foldLimit(), names()),
     })
   })
+  const rows = computed(() => inOrder(passing.value, order.value))
   const place = computed(() => rowOfFeature(rows.value, order.value.length))
   const selectedRow = computed(() => bench.selected === null ? -1 : place.value[bench.selected] ?? -1)
 
@@ -38,5 +40,5 @@ export function useFeatureRows(result: () => VerdictResult | null, names: () => 
     const feature = rows.value[row]
     if (feature !== undefined) bench.select(feature)
   }
-  return { rows, selectedRow, step, selectRow, toEdge: (end: boolean) => selectRow(end ? rows.value.length - 1 : 0) }
+  return { rows, passing, selectedRow, step, selectRow, toEdge: (end: boolean) => selectRow(end ? rows.value.length - 1 : 0) }
 }

@@ -27,6 +27,13 @@ export function filterFeatures(columns: VerdictColumns, order: Int32Array, filte
   return rows.slice(0, count)
 }
 
+/** The same features in the order of `order`, which holds every feature once. */
+export function inOrder(features: Int32Array, order: Int32Array): Int32Array {
+  const passes = new Uint8Array(order.length)
+  for (const feature of features) passes[feature] = 1
+  return order.filter(feature => passes[feature] === 1)
+}
+
 /** Where each feature stands among the rows; −1 for those that do not. */
 export function rowOfFeature(rows: Int32Array, features: number): Int32Array {
   const place = new Int32Array(features).fill(-1)

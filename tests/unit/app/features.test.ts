@@ -1,6 +1,6 @@
 import fc from 'fast-check'
 import { describe, expect, it } from 'vitest'
-import { filterFeatures, rowOfFeature, type FeatureFilter } from '../../../app/utils/featureFilter'
+import { filterFeatures, inOrder, rowOfFeature, type FeatureFilter } from '../../../app/utils/featureFilter'
 import { orderFeatures, SORT_KEYS, sortValues } from '../../../app/utils/featureOrder'
 import { parseSearch, searchRule } from '../../../app/utils/featureSearch'
 import { VERDICT } from '../../../shared/science/verdict/verdicts'
@@ -50,6 +50,12 @@ describe('filter of features', () => {
   it('passes flagged features only where asked', () => {
     expect([...filterFeatures(columns, order, { ...all, flagged: new Set([5, 9]) })]).toEqual([5, 9].filter(i => columns.verdict[i] !== VERDICT.inNeither))
     expect(filterFeatures(columns, order, { ...all, flagged: new Set() })).toHaveLength(0)
+  })
+
+  it('gives the same features in another order', () => {
+    const byRatio = orderFeatures(columns, { key: 'ratio', descending: true })
+    const filter: FeatureFilter = { ...all, verdicts: ['moreA', 'unsettled'] }
+    expect(inOrder(filterFeatures(columns, order, filter), byRatio)).toEqual(filterFeatures(columns, byRatio, filter))
   })
 
   it('knows the row of each feature', () => {
