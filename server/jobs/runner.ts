@@ -1,6 +1,6 @@
 import { availableParallelism } from 'node:os'
 import { Worker } from 'node:worker_threads'
-import { and, asc, eq, inArray } from 'drizzle-orm'
+import { and, asc, eq, inArray, sql } from 'drizzle-orm'
 import { jobs } from '../db/schema'
 import { DomainError } from '../domain/DomainError'
 import type { AnyJobKind, Job, JobContext, WorkerMessage } from './kind'
@@ -69,7 +69,7 @@ export class Jobs {
   private next() {
     if (this.stopped || this.running.size >= this.atOnce) return
     const { db } = this.context
-    const job = db.select().from(jobs).where(eq(jobs.status, 'queued')).orderBy(asc(jobs.createdAt), asc(jobs.id)).get()
+    const job = db.select().from(jobs).where(eq(jobs.status, 'queued')).orderBy(asc(jobs.createdAt), sql`rowid`).get()
     if (!job) return
     db.update(jobs).set({ status: 'running', startedAt: new Date(), attempts: job.attempts + 1, message: 'Starting.' }).where(eq(jobs.id, job.id)).run()
     this.start(job)
