@@ -120,7 +120,7 @@ describe('from sign-in to what only one side holds', () => {
     await page.getByRole('button', { name: /^found only in Millrace/ }).click()
     const rows = page.getByRole('grid', { name: 'Features' }).getByRole('row')
     await rows.filter({ hasText: 'found only in Millrace' }).first().waitFor()
-    const shown = await page.getByRole('search', { name: 'Features' }).getByRole('status').textContent()
+    const shown = await page.getByRole('search', { name: 'Features' }).getByRole('status').filter({ hasText: /features$/ }).textContent()
     expect(Number(/^\d+/.exec(shown ?? '')?.[0])).toBeGreaterThan(20)
     await page.getByLabel('Find a feature').fill('153.0193')
     await rows.filter({ hasText: /153\.0[12]/ }).first().click()
