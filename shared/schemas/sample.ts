@@ -10,6 +10,9 @@ export const sampleKindNames: Record<SampleKind, string> = {
   standard: 'standard',
 }
 
+/** A blank is never a side, and never the reference of an alignment. */
+export const isBlank = (kind: SampleKind | null) => kind === 'solventBlank' || kind === 'processBlank'
+
 export const sides = ['A', 'B'] as const
 export type Side = (typeof sides)[number]
 

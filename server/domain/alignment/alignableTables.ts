@@ -1,4 +1,5 @@
 import { and, asc, eq, isNull } from 'drizzle-orm'
+import { isBlank } from '../../../shared/schemas/sample'
 import type { AlignableTables } from '../../../shared/types/alignment'
 import type { Database } from '../../db/open'
 import { samples, tables } from '../../db/schema'
@@ -12,7 +13,7 @@ export function alignableTables(db: Database, studyId: string): AlignableTables 
     .where(and(eq(tables.studyId, studyId), isNull(tables.replacedAt))).orderBy(asc(samples.position), asc(tables.createdAt)).all()
   const placed = rows.filter(row => row.sampleName !== null)
   return {
-    tables: placed.map(row => ({ id: row.id, sampleName: row.sampleName ?? '', features: row.features, digest: row.digest, blank: row.kind === 'solventBlank' || row.kind === 'processBlank', wide: row.wideGroup !== null })),
+    tables: placed.map(row => ({ id: row.id, sampleName: row.sampleName ?? '', features: row.features, digest: row.digest, blank: isBlank(row.kind), wide: row.wideGroup !== null })),
     withoutSample: rows.filter(row => row.sampleName === null).map(row => row.columnName ? `${row.fileName}, ${row.columnName}` : row.fileName),
     problem: problemOf(placed),
   }

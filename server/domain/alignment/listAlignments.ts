@@ -2,9 +2,9 @@ import { and, asc, count, countDistinct, desc, eq, inArray, or } from 'drizzle-o
 import type { AlignmentLine, AlignmentList } from '../../../shared/types/alignment'
 import type { Database } from '../../db/open'
 import { alignments, alignmentTables, comparisons, comparisonVersions, jobs, people } from '../../db/schema'
+import { isPractice } from '../job/findJob'
 import type { Person } from '../person/person'
 import { alignableTables } from './alignableTables'
-import type { AlignInput } from './alignInput'
 
 /** A study's alignments, newest first: the official ones, and one's own practice runs. */
 export function listAlignments(db: Database, studyId: string, person: Person): AlignmentList {
@@ -27,7 +27,7 @@ export function alignmentLines(db: Database, studyId: string, person: Person, al
 
 function openRuns(db: Database, studyId: string, person: Person): AlignmentList['jobs'] {
   return db.select().from(jobs).where(and(eq(jobs.studyId, studyId), eq(jobs.kind, 'align'), inArray(jobs.status, ['queued', 'running']))).orderBy(asc(jobs.createdAt)).all()
-    .map(job => ({ job, practice: (job.input as AlignInput).practice }))
+    .map(job => ({ job, practice: isPractice(job.input) }))
     .filter(({ job, practice }) => !practice || job.createdBy === person.id)
     .map(({ job, practice }) => ({ id: job.id, message: job.message, progress: job.progress, practice }))
 }

@@ -1,4 +1,5 @@
 import { eq } from 'drizzle-orm'
+import { isBlank } from '../../../shared/schemas/sample'
 import type { Database } from '../../db/open'
 import { samples, tables } from '../../db/schema'
 import { DomainError } from '../DomainError'
@@ -15,7 +16,7 @@ export function readAlignTask(db: Database, input: AlignInput): AlignTask {
   return {
     tables: rows.map(({ table, kind, runOrder }) => ({
       digest: table.digest,
-      blank: kind === 'solventBlank' || kind === 'processBlank',
+      blank: isBlank(kind),
       runOrder,
       mz: readColumn(db, table.id, 'mz'),
       retentionMinutes: readColumn(db, table.id, 'retentionMinutes'),

@@ -15,6 +15,7 @@ export function findJob(db: Database, jobId: string, person: Person) {
   return job
 }
 
-function isPractice(input: unknown) {
+/** Does the job do practice work, for the eyes of its maker alone? */
+export function isPractice(input: unknown): boolean {
   return typeof input === 'object' && input !== null && 'practice' in input && input.practice === true
 }
