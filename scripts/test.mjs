@@ -9,19 +9,21 @@ const CHROMIUM = '/usr/bin/chromium'
 prepare()
 installChromium()
 let passed = 0
-let failed = 0
+/** What failed, in words: told once more at the end, where a long record is read first. */
+const failures = []
 step('lint', 'npx', ['eslint', '.', '--max-warnings', '0'])
 step('types', 'npx', ['nuxt', 'typecheck'])
 tests('unit', 'reference', 'server', 'nuxt')
 tests('browser')
-console.log(`${passed} passed, ${failed} failed`)
-process.exit(failed > 0 ? 1 : 0)
+for (const failure of failures) console.log(`\nFAILED ${failure}`)
+console.log(`\n${passed} passed, ${failures.length} failed`)
+process.exit(failures.length > 0 ? 1 : 0)
 
 function step(name, command, args) {
   console.log(`\n== ${name}`)
   const { status } = spawnSync(command, args, { stdio: 'inherit' })
   if (status === 0) passed++
-  else failed++
+  else failures.push(name)
 }
 
 /** The browser tests come after the others: they want the machine to themselves. */
@@ -30,11 +32,13 @@ function tests(...projects) {
   rmSync(results, { force: true })
   console.log(`\n== tests: ${projects.join(', ')}`)
   const { status } = spawnSync('npx', ['vitest', 'run', ...projects.flatMap(name => ['--project', name]), '--reporter=default', '--reporter=json', `--outputFile.json=${results}`], { stdio: 'inherit' })
-  const counted = existsSync(results) ? JSON.parse(readFileSync(results, 'utf8')) : { numPassedTests: 0, numFailedTests: 0 }
+  const counted = existsSync(results) ? JSON.parse(readFileSync(results, 'utf8')) : { numPassedTests: 0, testResults: [] }
   passed += counted.numPassedTests
-  failed += counted.numFailedTests
+  const failed = counted.testResults.flatMap(file => file.assertionResults.filter(test => test.status === 'failed')
+    .map(test => `${file.name}: ${test.fullName}\n${test.failureMessages.join('\n')}`))
+  failures.push(...failed)
   // A run may fail without a failed test: an error outside one, or a file that can't be read.
-  if (status !== 0 && counted.numFailedTests === 0) failed++
+  if (status !== 0 && failed.length === 0) failures.push(`${projects.join(', ')}: ended with ${status}, though no test failed`)
 }
 
 function installChromium() {
