@@ -1,5 +1,6 @@
 import { blob, index, integer, sqliteTable, text, uniqueIndex } from 'drizzle-orm/sqlite-core'
 import type { ComparedSample, ComparisonSettings } from '../../../shared/science/verdict/settings'
+import type { UsedTrace } from '../../../shared/types/trace'
 import { alignments } from './alignments'
 import { createdAt, id, moment } from './columns'
 import { people } from './people'
@@ -28,6 +29,8 @@ export const comparisonVersions = sqliteTable('comparison_versions', {
   sideBName: text().notNull(),
   settings: text({ mode: 'json' }).$type<ComparisonSettings>().notNull(),
   samples: text({ mode: 'json' }).$type<ComparedSample[]>().notNull(),
+  /** The raw data that were looked into, by the sample's place among `samples`; empty: none. */
+  traces: text({ mode: 'json' }).$type<UsedTrace[]>().notNull().default([]),
   engineVersion: text().notNull(),
   /** What differs from the version before, as sentences. */
   differs: text({ mode: 'json' }).$type<string[]>().notNull().default([]),

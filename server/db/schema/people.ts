@@ -1,4 +1,4 @@
-import { index, primaryKey, sqliteTable, text, uniqueIndex } from 'drizzle-orm/sqlite-core'
+import { index, integer, primaryKey, sqliteTable, text, uniqueIndex } from 'drizzle-orm/sqlite-core'
 import type { Role } from '../../../shared/permissions/roles'
 import { createdAt, id, moment } from './columns'
 
@@ -11,6 +11,8 @@ export const people = sqliteTable('people', {
   email: text(),
   /** Null until the person has set one by their one-time link. */
   passwordHash: text(),
+  /** Single keys act on the bench; a person can put them off (WCAG 2.1.4). */
+  benchKeys: integer({ mode: 'boolean' }).notNull().default(true),
   createdAt: createdAt(),
   closedAt: moment(),
 }, table => [uniqueIndex('people_sign_in_name').on(table.signInName)])

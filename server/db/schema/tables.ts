@@ -32,6 +32,8 @@ export const layouts = sqliteTable('layouts', {
 export const uploads = sqliteTable('uploads', {
   id: id(),
   studyId: text().notNull().references(() => studies.id, { onDelete: 'cascade' }),
+  /** A feature table, or raw data that give traces. */
+  kind: text().$type<'table' | 'trace'>().notNull().default('table'),
   fileName: text().notNull(),
   sha256: text().notNull(),
   bytes: integer().notNull(),
