@@ -1,7 +1,7 @@
 import { useDebounceFn } from '@vueuse/core'
-import { queryToView, viewToQuery, type Query } from '~/utils/benchView'
+import { queryToView, stepsOf, viewFields, viewToQuery, type Query } from '~/utils/benchView'
 
-const KEYS = Object.keys(viewToQuery(queryToView({})))
+const KEYS = Object.values(viewFields).map(({ key }) => key)
 
 /**
  * Keeps the store of the bench and the query of the address the same, both ways. Filters and sorting make a step that
@@ -16,13 +16,12 @@ export function useBenchAddress() {
   let ours = ''
   const textOf = (query: Query | typeof route.query) => KEYS.map(key => query[key] ?? '').join('\n')
 
-  const stepped = () => JSON.stringify([bench.verdicts, bench.flags, bench.sort])
-  let before = stepped()
+  let before = stepsOf(bench.$state)
   watch(() => textOf(route.query), (text) => {
     if (text === ours) return
     ours = text
     bench.show(queryToView(route.query))
-    before = stepped()
+    before = stepsOf(bench.$state)
   })
   // What was done last on a bench must not land in the address of the page after it.
   let left = false
@@ -32,8 +31,8 @@ export function useBenchAddress() {
     const query = viewToQuery(bench.$state)
     ours = textOf(query)
     if (ours === textOf(route.query)) return
-    const isStep = stepped() !== before
-    before = stepped()
+    const isStep = stepsOf(bench.$state) !== before
+    before = stepsOf(bench.$state)
     void router[isStep ? 'push' : 'replace']({ query: { ...route.query, ...query }, hash: route.hash })
   }, 120)
   watch(() => bench.$state, write, { deep: true })

@@ -1,19 +1,30 @@
-import { benchDefaults, type BenchView } from '~/utils/benchView'
+import { initialView, MOST_PICKED, type BenchView } from '~/utils/benchView'
 import type { SortKey } from '~/utils/featureOrder'
 import type { Verdict } from '#shared/science/verdict/verdicts'
 
-/** What is selected, filtered, looked for and sorted on the bench: one truth for plot, bar, table and card. */
+/** What is selected, picked, filtered, looked for, sorted and drawn on the bench: one truth for plots, bar, table and card. */
 export const useBenchStore = defineStore('bench', {
-  state: (): BenchView => ({ ...benchDefaults, verdicts: [...benchDefaults.verdicts], sort: { ...benchDefaults.sort } }),
+  state: (): BenchView => initialView(),
   getters: {
     isFiltered: state => state.verdicts.length > 0 || state.flags !== 'all' || state.find !== '',
+    /** The selected feature first, then those picked beside it. */
+    looked: (state): number[] => [...(state.selected === null ? [] : [state.selected]), ...state.picked.filter(each => each !== state.selected)],
   },
   actions: {
     show(view: BenchView) {
-      this.$patch({ ...view, verdicts: [...view.verdicts], sort: { ...view.sort } })
+      this.$patch(structuredClone(toRaw(view)))
     },
+    /** Looks at one feature; those picked before are let go. */
     select(feature: number | null) {
       this.selected = feature
+      this.picked = []
+    },
+    /** Takes a feature to those looked at, or away from them; the first one picked is the selected one. */
+    pick(feature: number) {
+      if (this.selected === null) this.selected = feature
+      else if (this.selected === feature) this.select(this.picked[0] ?? null)
+      else if (this.picked.includes(feature)) this.picked = this.picked.filter(each => each !== feature)
+      else this.picked = [...this.picked, feature].sort((a, b) => a - b).slice(0, MOST_PICKED)
     },
     toggleVerdict(verdict: Verdict) {
       this.verdicts = this.verdicts.includes(verdict) ? this.verdicts.filter(each => each !== verdict) : [...this.verdicts, verdict]

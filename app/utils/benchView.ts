@@ -1,63 +1,92 @@
 import { flagKinds, type FlagKind } from '#shared/schemas/flag'
 import { COUNTED_VERDICTS, type Verdict } from '#shared/science/verdict/verdicts'
-import { SORT_KEYS, type FeatureSort, type SortKey } from '~/utils/featureOrder'
+import { SORT_KEYS, type FeatureSort } from '~/utils/featureOrder'
+
+/** One part of what the bench shows, and how the address holds it: undefined where it stands as by default. */
+export interface ViewField<Value> {
+  initial: Value
+  /** Its name in the query. */
+  key: string
+  /** `text` is not empty; whatever a person made of it. Undefined: no such value. */
+  read: (text: string) => Value | undefined
+  write: (value: Value) => string
+  /** A change of it is a step that "back" takes back; moving from feature to feature and typing are none. */
+  isStep: boolean
+}
 
 /** Features with or without flags; with any flag; with a flag of one kind. */
 export type FlagFilter = 'all' | 'flagged' | FlagKind
 
-/** What of the bench the address holds, so that a copied link opens it again. */
-export interface BenchView {
-  /** Place of the selected feature in the alignment. */
-  selected: number | null
-  verdicts: Verdict[]
-  flags: FlagFilter
-  find: string
-  massPpm: number
-  sort: FeatureSort
+/** What the large plot of the bench draws. */
+export const PLOTS = ['fold', 'components', 'abundance'] as const
+export type Plot = (typeof PLOTS)[number]
+
+/** So many features can be picked beside the selected one and stand in the address. */
+export const MOST_PICKED = 100
+
+const field = <Value>(each: ViewField<Value>) => each
+
+/** All that the address holds of the bench, so that a copied link opens it again. A new part is one more field here. */
+export const viewFields = {
+  /** Place of the selected feature in the alignment; numbered from 1 in the address, as on the page. */
+  selected: field<number | null>({ initial: null, key: 'feature', isStep: false, read: featureNumber, write: value => value === null ? '' : String(value + 1) }),
+  /** Features looked at beside the selected one, in ascending order. */
+  picked: field<number[]>({ initial: [], key: 'also', isStep: false, write: value => value.map(each => each + 1).join('.'), read: (text) => {
+    const read = text.split('.').flatMap(each => featureNumber(each) ?? [])
+    return [...new Set(read)].sort((a, b) => a - b).slice(0, MOST_PICKED)
+  } }),
+  verdicts: field<Verdict[]>({ initial: [], key: 'verdict', isStep: true, write: value => COUNTED_VERDICTS.filter(name => value.includes(name)).join('.'), read: (text) => {
+    const named = text.split('.')
+    return COUNTED_VERDICTS.filter(name => named.includes(name))
+  } }),
+  flags: field<FlagFilter>({ initial: 'all', key: 'flags', isStep: true, read: text => (['flagged', ...flagKinds] as const).find(name => name === text), write: value => value }),
+  find: field<string>({ initial: '', key: 'find', isStep: false, read: text => text.slice(0, 200), write: value => value }),
+  massPpm: field<number>({ initial: 10, key: 'ppm', isStep: false, read: text => Number(text) > 0 && Number(text) <= 10_000 ? Number(text) : undefined, write: String }),
+  sort: field<FeatureSort>({ initial: { key: 'intensity', descending: true }, key: 'sort', isStep: true, read: sortOf, write: value => `${value.descending ? '-' : ''}${value.key}` }),
+  plot: field<Plot>({ initial: 'fold', key: 'plot', isStep: true, read: text => PLOTS.find(name => name === text), write: value => value }),
 }
 
-export const benchDefaults: Readonly<BenchView> = {
-  selected: null, verdicts: [], flags: 'all', find: '', massPpm: 10, sort: { key: 'intensity', descending: true },
-}
-
+type Fields = typeof viewFields
+export type BenchView = { [Name in keyof Fields]: Fields[Name]['initial'] }
 export type Query = Record<string, string | undefined>
 
-/** The view as a query; what stands as by default is left out. Features are numbered from 1, as on the page. */
+const entries = Object.entries(viewFields) as [keyof Fields, ViewField<unknown>][]
+
+/** The view as the bench opens; a copy, so that nobody changes the next one's. */
+export function initialView(): BenchView {
+  return structuredClone(Object.fromEntries(entries.map(([name, { initial }]) => [name, initial]))) as BenchView
+}
+
+/** The view as a query; what stands as by default is left out. */
 export function viewToQuery(view: BenchView): Query {
-  const { selected, verdicts, flags, find, massPpm, sort } = view
-  const sortText = (each: FeatureSort) => `${each.descending ? '-' : ''}${each.key}`
-  return {
-    feature: selected === null ? undefined : String(selected + 1),
-    verdict: verdicts.length > 0 ? COUNTED_VERDICTS.filter(name => verdicts.includes(name)).join('.') : undefined,
-    flags: flags === 'all' ? undefined : flags,
-    find: find || undefined,
-    ppm: massPpm === benchDefaults.massPpm ? undefined : String(massPpm),
-    sort: sortText(sort) === sortText(benchDefaults.sort) ? undefined : sortText(sort),
-  }
+  return Object.fromEntries(entries.map(([name, { initial, key, write }]) => {
+    const text = write(view[name])
+    return [key, text === '' || text === write(initial) ? undefined : text]
+  }))
 }
 
 /** Reads a query, whatever a person made of it; what is no view stands as by default. */
 export function queryToView(query: Record<string, unknown>): BenchView {
-  const text = (name: string) => typeof query[name] === 'string' ? query[name] : ''
-  const feature = /^\d{1,9}$/.test(text('feature')) ? Number(text('feature')) : 0
-  const named = text('verdict').split('.')
-  const massPpm = Number(text('ppm'))
-  return {
-    selected: feature > 0 ? feature - 1 : null,
-    verdicts: COUNTED_VERDICTS.filter(name => named.includes(name)),
-    flags: (['flagged', ...flagKinds] as const).find(name => name === text('flags')) ?? 'all',
-    find: text('find').slice(0, 200),
-    massPpm: massPpm > 0 && massPpm <= 10_000 ? massPpm : benchDefaults.massPpm,
-    sort: sortOf(text('sort')),
+  const view = initialView()
+  for (const [name, { key, read }] of entries) {
+    const text = query[key]
+    const value = typeof text === 'string' && text !== '' ? read(text) : undefined
+    if (value !== undefined) Object.assign(view, { [name]: value })
   }
+  return view
 }
 
-function sortOf(text: string): FeatureSort {
+/** What of a view makes a step of the history, as one text. */
+export function stepsOf(view: BenchView): string {
+  return JSON.stringify(entries.filter(([, { isStep }]) => isStep).map(([name]) => view[name]))
+}
+
+function featureNumber(text: string): number | undefined {
+  return /^[1-9]\d{0,8}$/.test(text) ? Number(text) - 1 : undefined
+}
+
+function sortOf(text: string): FeatureSort | undefined {
   const descending = text.startsWith('-')
-  const key = text.slice(descending ? 1 : 0)
-  return isSortKey(key) ? { key, descending } : benchDefaults.sort
-}
-
-function isSortKey(key: string): key is SortKey {
-  return (SORT_KEYS as readonly string[]).includes(key)
+  const key = SORT_KEYS.find(name => name === text.slice(descending ? 1 : 0))
+  return key && { key, descending }
 }

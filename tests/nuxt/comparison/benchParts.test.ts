@@ -5,13 +5,13 @@ import FeatureCard from '~/components/comparison/FeatureCard.vue'
 import FeatureTable from '~/components/comparison/FeatureTable.vue'
 import SettingsPanel from '~/components/comparison/SettingsPanel.vue'
 import { VERDICT } from '#shared/science/verdict/verdicts'
-import { benchDefaults } from '~/utils/benchView'
+import { initialView } from '~/utils/benchView'
 import { manyVerdicts } from '../../support/manyFeatures'
 
 const names = { a: 'Millrace', b: 'Tallow Lane' }
 const many = manyVerdicts(500)
 const rows = Int32Array.from({ length: 500 }, (_, i) => i)
-beforeEach(() => useBenchStore().show(benchDefaults))
+beforeEach(() => useBenchStore().show(initialView()))
 
 describe('the balance bar', () => {
   it('filters by a part and says that it does', async () => {

@@ -1,17 +1,19 @@
 import fc from 'fast-check'
 import { describe, expect, it } from 'vitest'
-import { benchDefaults, queryToView, viewToQuery, type BenchView } from '../../../app/utils/benchView'
+import { initialView, PLOTS, queryToView, stepsOf, viewFields, viewToQuery, type BenchView } from '../../../app/utils/benchView'
 import { SORT_KEYS } from '../../../app/utils/featureOrder'
 import { flagKinds } from '../../../shared/schemas/flag'
 import { COUNTED_VERDICTS } from '../../../shared/science/verdict/verdicts'
 
 const view: fc.Arbitrary<BenchView> = fc.record({
   selected: fc.option(fc.nat(999_999), { nil: null }),
+  picked: fc.uniqueArray(fc.nat(999_999), { maxLength: 100 }).map(all => all.sort((a, b) => a - b)),
   verdicts: fc.subarray([...COUNTED_VERDICTS]),
   flags: fc.constantFrom('all' as const, 'flagged' as const, ...flagKinds),
   find: fc.string({ maxLength: 40 }),
   massPpm: fc.integer({ min: 1, max: 100 }),
   sort: fc.record({ key: fc.constantFrom(...SORT_KEYS), descending: fc.boolean() }),
+  plot: fc.constantFrom(...PLOTS),
 })
 
 describe('the address of the bench', () => {
@@ -22,14 +24,23 @@ describe('the address of the bench', () => {
   })
 
   it('is empty for the view as it opens', () => {
-    expect(Object.values(viewToQuery(benchDefaults)).filter(Boolean)).toEqual([])
+    expect(Object.values(viewToQuery(initialView())).filter(Boolean)).toEqual([])
   })
 
   it('takes any query without harm', () => {
-    fc.assert(fc.property(fc.dictionary(fc.constantFrom('feature', 'verdict', 'flags', 'find', 'ppm', 'sort'), fc.oneof(fc.string(), fc.constant(null), fc.array(fc.string()))), (query) => {
+    fc.assert(fc.property(fc.dictionary(fc.constantFrom(...Object.values(viewFields).map(({ key }) => key)), fc.oneof(fc.string(), fc.constant(null), fc.array(fc.string()))), (query) => {
       const read = queryToView(query)
       expect(SORT_KEYS).toContain(read.sort.key)
       expect(read.massPpm).toBeGreaterThan(0)
+      expect(queryToView(viewToQuery(read))).toEqual(read)
     }))
+  })
+
+  it('counts filters, order and plot as steps of the history, moving about not', () => {
+    const view = initialView()
+    expect(stepsOf({ ...view, selected: 3, picked: [5], find: 'x' })).toBe(stepsOf(view))
+    for (const changed of [{ plot: 'abundance' as const }, { verdicts: ['level' as const] }, { flags: 'flagged' as const }]) {
+      expect(stepsOf({ ...view, ...changed })).not.toBe(stepsOf(view))
+    }
   })
 })
