@@ -1,0 +1,68 @@
+import { and, asc, eq, inArray, isNull } from 'drizzle-orm'
+import { correctScans } from '../../../shared/science/traces/correctScans'
+import type { UsedTrace } from '../../../shared/types/trace'
+import type { Database } from '../../db/open'
+import { unpackFloat64 } from '../../db/packed'
+import { alignmentTables, traces } from '../../db/schema'
+
+/** One sample's trace as an alignment sees it. */
+export interface AlignedTrace extends UsedTrace {
+  sampleName: string
+  /** Minutes a scan, corrected by the drift of the sample's table to the alignment's common time; not always ascending. */
+  scanMinutes: Float64Array
+  /** Offset of its masses, ppm: a feature at m/z stands in the file at m/z × (1 + offsetPpm·10⁻⁶). 0 where none was taken out. */
+  offsetPpm: number
+  lowestMz: number
+  highestMz: number
+  /** Centroids below this intensity were not kept. */
+  intensityLimit: number
+}
+
+/**
+ * The traces that stand now for the samples of an alignment, in the order of its tables; samples without one are not in it.
+ * Whoever calls has looked at the right to see the alignment.
+ */
+export function standingTraces(db: Database, alignmentId: string): AlignedTrace[] {
+  const places = tablePlaces(db, alignmentId)
+  const sampleIds = places.flatMap(({ sampleId }) => sampleId ?? [])
+  const rows = db.select(brief).from(traces).where(and(inArray(traces.sampleId, sampleIds), isNull(traces.replacedAt))).orderBy(asc(traces.createdAt), asc(traces.id)).all()
+  const bySample = new Map(rows.map(row => [row.sampleId, row]))
+  return places.flatMap((place) => {
+    const trace = place.sampleId === null ? undefined : bySample.get(place.sampleId)
+    return trace ? [alignedTrace(place, trace)] : []
+  })
+}
+
+/** The traces that a version of a comparison used, whether they still stand or not; those that are gone are not in it. */
+export function usedTraces(db: Database, alignmentId: string, used: readonly UsedTrace[]): AlignedTrace[] {
+  if (used.length === 0) return []
+  const places = new Map(tablePlaces(db, alignmentId).map(place => [place.position, place]))
+  const rows = new Map(db.select(brief).from(traces).where(inArray(traces.id, used.map(({ traceId }) => traceId))).all().map(row => [row.id, row]))
+  return used.flatMap(({ position, traceId }) => {
+    const [place, trace] = [places.get(position), rows.get(traceId)]
+    return place && trace ? [alignedTrace(place, trace)] : []
+  })
+}
+
+const brief = {
+  id: traces.id, sampleId: traces.sampleId, fileName: traces.fileName, sha256: traces.sha256, minutes: traces.minutes,
+  lowestMz: traces.lowestMz, highestMz: traces.highestMz, intensityLimit: traces.intensityLimit,
+}
+
+function tablePlaces(db: Database, alignmentId: string) {
+  const { position, sampleId, sampleName, offsetPpm, offsetApplied, driftMinutes, driftShift } = alignmentTables
+  return db.select({ position, sampleId, sampleName, offsetPpm, offsetApplied, driftMinutes, driftShift }).from(alignmentTables)
+    .where(eq(alignmentTables.alignmentId, alignmentId)).orderBy(asc(position)).all()
+}
+
+type Place = ReturnType<typeof tablePlaces>[number]
+type TraceRow = Pick<typeof traces.$inferSelect, keyof typeof brief>
+
+function alignedTrace(place: Place, trace: TraceRow): AlignedTrace {
+  const { fileName, sha256, lowestMz, highestMz, intensityLimit } = trace
+  return {
+    position: place.position, sampleName: place.sampleName, traceId: trace.id, fileName, sha256, lowestMz, highestMz, intensityLimit,
+    scanMinutes: correctScans(unpackFloat64(trace.minutes), { knotMinutes: unpackFloat64(place.driftMinutes), knotShiftMinutes: unpackFloat64(place.driftShift) }),
+    offsetPpm: place.offsetApplied ? place.offsetPpm : 0,
+  }
+}

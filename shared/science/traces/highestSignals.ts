@@ -1,0 +1,110 @@
+import { massToleranceDa } from '../mass/tolerance'
+import { ascendingOrder } from '../numeric/ascendingOrder'
+
+/** Centroids of one trace in ascending m/z: columns of the same length. `scan` is the place of its scan among the trace's scans. */
+export interface Centroids {
+  mz: Float64Array
+  intensity: Float64Array | Float32Array
+  scan: Int32Array | Uint32Array | Uint16Array
+}
+
+/** One sample's trace as an alignment sees it. */
+export interface AlignedScans {
+  /** Minutes a scan, corrected to the alignment's common time. */
+  scanMinutes: Float64Array
+  /** Offset of its masses, ppm; 0 where none is taken out. */
+  offsetPpm: number
+  /** Lowest and highest m/z of its centroids, as the file has them. */
+  lowestMz: number
+  highestMz: number
+  /** Pieces that together hold each centroid of the range once; they may hold others too. Asked for in ascending m/z. */
+  centroidsBetween: (lowestMz: number, highestMz: number) => readonly Centroids[]
+}
+
+/** How far from a feature's m/z and time a signal may stand: the tolerances of the alignment. */
+export interface SignalWindow {
+  alignMassPpm: number
+  /** Smallest mass tolerance, Da; null: follows the ppm. */
+  massFloorDa: number | null
+  retentionMinutes: number
+}
+
+const FEATURES_A_STEP = 1000
+
+/**
+ * The highest extracted signal of each aligned feature in one trace: per scan the sum of the centroids within the mass tolerance,
+ * and of the scans within the time tolerance the highest sum. Counts.
+ *
+ * 0 where nothing stands there; NaN where the trace does not cover the feature: its mass window lies beyond all centroids, its time
+ * outside the first and last scan, or no scan within the time tolerance. A mass offset shifts the window instead of the centroids.
+ *
+ * @param mz m/z of the aligned features, in any order
+ * @param minutes their times, common time
+ * @param onStep told the share of features that is done, now and then
+ */
+export function highestSignals(mz: Float64Array, minutes: Float64Array, trace: AlignedScans, window: SignalWindow, onStep?: (share: number) => void): Float64Array {
+  const scans = scansInOrder(trace.scanMinutes)
+  const sum = new Float64Array(scans.minutes.length)
+  const shift = 1 + trace.offsetPpm * 1e-6
+  const highest = new Float64Array(mz.length).fill(Number.NaN)
+  ascendingOrder(mz).forEach((i, step) => {
+    if (step % FEATURES_A_STEP === 0) onStep?.(step / mz.length)
+    const tolerance = massToleranceDa(mz[i]!, window.alignMassPpm, window.massFloorDa)
+    const low = (mz[i]! - tolerance) * shift
+    const high = (mz[i]! + tolerance) * shift
+    if (high < trace.lowestMz || low > trace.highestMz) return
+    const first = firstAtLeast(scans.minutes, minutes[i]! - window.retentionMinutes)
+    const end = firstAbove(scans.minutes, minutes[i]! + window.retentionMinutes)
+    if (first >= end || !(minutes[i]! >= scans.minutes[0]!) || !(minutes[i]! <= scans.minutes.at(-1)!)) return
+    for (const piece of trace.centroidsBetween(low, high)) addCentroids(piece, low, high, scans.rank, first, end, sum)
+    let most = 0
+    for (let s = first; s < end; s++) {
+      if (sum[s]! > most) most = sum[s]!
+      sum[s] = 0
+    }
+    highest[i] = most
+  })
+  return highest
+}
+
+/** The scans in ascending time, and the place of each in that order. */
+function scansInOrder(scanMinutes: Float64Array) {
+  const order = ascendingOrder(scanMinutes)
+  const minutes = new Float64Array(order.length)
+  const rank = new Int32Array(order.length)
+  for (let place = 0; place < order.length; place++) {
+    minutes[place] = scanMinutes[order[place]!]!
+    rank[order[place]!] = place
+  }
+  return { minutes, rank }
+}
+
+/** Adds the centroids between two m/z to the sums of their scans, for scans of rank `first` up to `end`. */
+function addCentroids({ mz, intensity, scan }: Centroids, low: number, high: number, rank: Int32Array, first: number, end: number, sum: Float64Array): void {
+  for (let c = firstAtLeast(mz, low); c < mz.length && mz[c]! <= high; c++) {
+    const place = rank[scan[c]!]!
+    if (place >= first && place < end) sum[place]! += intensity[c]!
+  }
+}
+
+function firstAtLeast(ascending: Float64Array, value: number): number {
+  let low = 0
+  let high = ascending.length
+  while (low < high) {
+    const middle = (low + high) >> 1
+    if (ascending[middle]! < value) low = middle + 1
+    else high = middle
+  }
+  return low
+}
+
+function firstAbove(ascending: Float64Array, value: number): number {
+  let low = 0
+  let high = ascending.length
+  while (low < high) {
+    const middle = (low + high) >> 1
+    if (ascending[middle]! <= value) low = middle + 1
+    else high = middle
+  }
+  return low
+}
