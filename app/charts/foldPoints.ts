@@ -37,6 +37,14 @@ const UNTESTED_DEPTH = 0.4
 /** A steady spread over 0 to 1, so that points of a strip do not hide each other: multiples of the golden ratio. */
 const spread = (i: number) => (i * 0.618033988749895) % 1
 
+const placed = new WeakMap<VerdictColumns, FoldPoints>()
+/** The places of a result's features, computed once for plot and filter. */
+export function placesOf(columns: VerdictColumns): FoldPoints {
+  const points = placed.get(columns) ?? placeFeatures(columns)
+  placed.set(columns, points)
+  return points
+}
+
 /** Gives every feature its place; one-sided ones stand at their reach, never at infinity. */
 export function placeFeatures(columns: VerdictColumns): FoldPoints {
   const features = columns.mz.length

@@ -1,6 +1,8 @@
 import type { SideNames } from '#shared/science/verdict/reasonFacts'
 import type { VerdictResult } from '#shared/science/verdict/verdictResult'
 import { verdictPhrase } from '#shared/science/verdict/verdictPhrase'
+import { areaRule } from '~/charts/foldArea'
+import { placesOf } from '~/charts/foldPoints'
 import { filterFeatures, inOrder, rowOfFeature } from '~/utils/featureFilter'
 import { orderFeatures } from '~/utils/featureOrder'
 import { parseSearch } from '~/utils/featureSearch'
@@ -21,6 +23,7 @@ export function useFeatureRows(result: () => VerdictResult | null, names: () => 
     return filterFeatures(columns, orderFeatures(columns, { key: 'number', descending: false }), {
       verdicts: [...bench.verdicts],
       flagged: bench.flags !== 'all' ? flagged() : null,
+      inside: bench.area && areaRule(placesOf(columns), bench.area),
       search: parseSearch(bench.find, bench.massPpm),
       said: i => verdictPhrase(columns.verdict[i] ?? 0, foldLimit(), names()),
     })

@@ -6,7 +6,7 @@ import type { Verdict } from '#shared/science/verdict/verdicts'
 export const useBenchStore = defineStore('bench', {
   state: (): BenchView => initialView(),
   getters: {
-    isFiltered: state => state.verdicts.length > 0 || state.flags !== 'all' || state.find !== '',
+    isFiltered: state => state.verdicts.length > 0 || state.flags !== 'all' || state.find !== '' || state.area !== null,
     /** The selected feature first, then those picked beside it. */
     looked: (state): number[] => [...(state.selected === null ? [] : [state.selected]), ...state.picked.filter(each => each !== state.selected)],
   },
@@ -38,6 +38,7 @@ export const useBenchStore = defineStore('bench', {
       this.verdicts = []
       this.flags = 'all'
       this.find = ''
+      this.area = null
     },
   },
 })

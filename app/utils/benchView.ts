@@ -1,5 +1,7 @@
 import { flagKinds, type FlagKind } from '#shared/schemas/flag'
 import { COUNTED_VERDICTS, type Verdict } from '#shared/science/verdict/verdicts'
+import { readArea, writeArea, type PlotArea } from '~/utils/plotArea'
+import { readWindow, writeWindow, type PlotWindow } from '~/utils/plotWindow'
 import { SORT_KEYS, type FeatureSort } from '~/utils/featureOrder'
 
 /** One part of what the bench shows, and how the address holds it: undefined where it stands as by default. */
@@ -44,6 +46,12 @@ export const viewFields = {
   massPpm: field<number>({ initial: 10, key: 'ppm', isStep: false, read: text => Number(text) > 0 && Number(text) <= 10_000 ? Number(text) : undefined, write: String }),
   sort: field<FeatureSort>({ initial: { key: 'intensity', descending: true }, key: 'sort', isStep: true, read: sortOf, write: value => `${value.descending ? '-' : ''}${value.key}` }),
   plot: field<Plot>({ initial: 'fold', key: 'plot', isStep: true, read: text => PLOTS.find(name => name === text), write: value => value }),
+  /** The features inside an area drawn on the fold-change plot; null: all. */
+  area: field<PlotArea | null>({ initial: null, key: 'area', isStep: true, read: readArea, write: writeArea }),
+  /** The part of the plot of ratios that is shown; null: all of it. */
+  foldWindow: field<PlotWindow | null>({ initial: null, key: 'window', isStep: false, read: readWindow, write: writeWindow }),
+  /** Every plot shows the surroundings of the selected feature, and follows it. */
+  closeUp: field<boolean>({ initial: false, key: 'close', isStep: false, read: text => text === 'yes' ? true : undefined, write: value => value ? 'yes' : '' }),
 }
 
 type Fields = typeof viewFields

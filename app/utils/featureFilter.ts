@@ -8,6 +8,8 @@ export interface FeatureFilter {
   /** Null: flagged or not. */
   flagged: ReadonlySet<number> | null
   search: FeatureSearch | null
+  /** Does the feature lie inside the area drawn? Null: anywhere. */
+  inside?: ((feature: number) => boolean) | null
   /** More words of a feature that a search may meet. */
   said: (feature: number) => string
 }
@@ -21,6 +23,7 @@ export function filterFeatures(columns: VerdictColumns, order: Int32Array, filte
   for (const i of order) {
     if (!wanted[columns.verdict[i] ?? VERDICT.inNeither]) continue
     if (filter.flagged && !filter.flagged.has(i)) continue
+    if (filter.inside && !filter.inside(i)) continue
     if (found && !found(i)) continue
     rows[count++] = i
   }
