@@ -1,3 +1,5 @@
+import type { Polarity } from '../schemas/method'
+import type { MassKind } from '../science/table/layout'
 import type { ComparedSample, ComparisonSettings } from '../science/verdict/settings'
 import type { Verdict } from '../science/verdict/verdicts'
 
@@ -37,6 +39,9 @@ export interface ComparisonDetail {
     settings: ComparisonSettings
     samples: (Omit<ComparedSample, 'floor'> & { floor: number | null })[]
     engineVersion: string
+    /** What its masses are: of ions of this polarity, or of neutral molecules. */
+    polarity: Polarity
+    massKind: MassKind
     cautions: string[]
     /** In the order of the samples. */
     tables: { sampleName: string, fileName: string, digest: string }[]

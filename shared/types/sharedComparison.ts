@@ -1,3 +1,5 @@
+import type { Polarity } from '../schemas/method'
+import type { MassKind } from '../science/table/layout'
 import type { ComparisonSettings } from '../science/verdict/settings'
 import type { Verdict } from '../science/verdict/verdicts'
 import type { ComparisonDetail } from './comparison'
@@ -13,6 +15,8 @@ export interface SharedComparison {
   settings: ComparisonSettings
   samples: ComparisonDetail['version']['samples']
   engineVersion: string
+  polarity: Polarity
+  massKind: MassKind
   cautions: string[]
   /** Mass tolerance of its alignment, ppm. */
   alignMassPpm: number

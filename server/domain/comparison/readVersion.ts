@@ -3,6 +3,7 @@ import type { ComparisonDetail, VersionLine } from '../../../shared/types/compar
 import type { Database } from '../../db/open'
 import { alignmentTables, comparisonVersions, tables } from '../../db/schema'
 import { notFound } from '../DomainError'
+import { alignedMasses } from './alignedMasses'
 import type { FoundVersion } from './findComparison'
 import { sheetChanges } from './sheetChanges'
 import { readSamples, storeSample } from './storedSample'
@@ -11,7 +12,10 @@ import { readSamples, storeSample } from './storedSample'
 export function versionDetail(db: Database, version: FoundVersion, line: VersionLine): ComparisonDetail['version'] {
   const { id, settings, engineVersion, cautions, alignmentId } = version
   const samples = readSamples(version.samples)
-  return { ...line, id, settings, engineVersion, cautions, samples: samples.map(storeSample), tables: versionTables(db, alignmentId), sheetChanges: sheetChanges(db, alignmentId, samples) }
+  return {
+    ...line, ...alignedMasses(db, alignmentId), id, settings, engineVersion, cautions, samples: samples.map(storeSample), tables: versionTables(db, alignmentId),
+    sheetChanges: sheetChanges(db, alignmentId, samples),
+  }
 }
 
 /** The tables an alignment used, in its order. */

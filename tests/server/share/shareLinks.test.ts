@@ -142,7 +142,7 @@ describe('what a guest reads', () => {
     addKeptComparison(laboratory, studyId, reviewer.id, alignmentOf(reviewer, 90_000), { comparisonId, settings: { reachLimit: 7 } })
     const shared = readSharedComparison(laboratory.db, open(secret))
     expect(JSON.stringify(shared)).toBe(before)
-    expect(Object.keys(shared).sort()).toEqual(['alignMassPpm', 'cautions', 'counts', 'createdAt', 'endsAt', 'engineVersion', 'mayExport', 'number', 'samples', 'settings', 'sideAName', 'sideBName', 'title'])
+    expect(Object.keys(shared).sort()).toEqual(['alignMassPpm', 'cautions', 'counts', 'createdAt', 'endsAt', 'engineVersion', 'massKind', 'mayExport', 'number', 'polarity', 'samples', 'settings', 'sideAName', 'sideBName', 'title'])
     const data = unpackComparisonData(sharedData(laboratory.db, open(secret)))
     const csv = await textOf(sharedCsv(laboratory.db, open(secret)))
     expect(data.intensity.map(column => [...column])).toEqual([[1000, 900], [1000, 4000]])
