@@ -2,6 +2,7 @@ import { flagKinds, type FlagKind } from '#shared/schemas/flag'
 import { COUNTED_VERDICTS, type Verdict } from '#shared/science/verdict/verdicts'
 import { readArea, writeArea, type PlotArea } from '~/utils/plotArea'
 import { readWindow, writeWindow, type PlotWindow } from '~/utils/plotWindow'
+import type { Signal } from '~/charts/sideMeans'
 import { SORT_KEYS, type FeatureSort } from '~/utils/featureOrder'
 
 /** One part of what the bench shows, and how the address holds it: undefined where it stands as by default. */
@@ -22,6 +23,11 @@ export type FlagFilter = 'all' | 'flagged' | FlagKind
 /** What the large plot of the bench draws. */
 export const PLOTS = ['fold', 'components', 'abundance'] as const
 export type Plot = (typeof PLOTS)[number]
+
+/** How the abundance plot lays its samples out, and which signal it draws. */
+export const ABUNDANCE_LAYOUTS = ['preparation', 'run'] as const
+export type AbundanceLayout = (typeof ABUNDANCE_LAYOUTS)[number]
+export const SIGNALS = ['normalised', 'injected'] as const
 
 /** So many features can be picked beside the selected one and stand in the address. */
 export const MOST_PICKED = 100
@@ -45,6 +51,8 @@ export const viewFields = {
   find: field<string>({ initial: '', key: 'find', isStep: false, read: text => text.slice(0, 200), write: value => value }),
   massPpm: field<number>({ initial: 10, key: 'ppm', isStep: false, read: text => Number(text) > 0 && Number(text) <= 10_000 ? Number(text) : undefined, write: String }),
   sort: field<FeatureSort>({ initial: { key: 'intensity', descending: true }, key: 'sort', isStep: true, read: sortOf, write: value => `${value.descending ? '-' : ''}${value.key}` }),
+  abundanceLayout: field<AbundanceLayout>({ initial: 'preparation', key: 'samples', isStep: true, read: text => ABUNDANCE_LAYOUTS.find(name => name === text), write: value => value }),
+  signal: field<Signal>({ initial: 'normalised', key: 'signal', isStep: true, read: text => SIGNALS.find(name => name === text), write: value => value }),
   plot: field<Plot>({ initial: 'fold', key: 'plot', isStep: true, read: text => PLOTS.find(name => name === text), write: value => value }),
   /** The features inside an area drawn on the fold-change plot; null: all. */
   area: field<PlotArea | null>({ initial: null, key: 'area', isStep: true, read: readArea, write: writeArea }),

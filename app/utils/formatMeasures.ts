@@ -18,7 +18,12 @@ export function formatIntensity(intensity: number): string {
   const size = Math.abs(Number(intensity.toPrecision(3)))
   if (size >= 0.01 && size < 1000) return intensity.toPrecision(3).replace('-', '−')
   const [digits = '', exponent = ''] = intensity.toExponential(2).split('e')
-  return `${digits.replace('-', '−')} × 10${[...exponent].map(sign => SUPERSCRIPT[sign] ?? '').join('')}`
+  return `${digits.replace('-', '−')} × ${powerOfTen(Number(exponent))}`
+}
+
+/** A power of ten with its exponent raised: 10⁵. */
+export function powerOfTen(exponent: number): string {
+  return `10${[...String(exponent)].map(sign => SUPERSCRIPT[sign] ?? '').join('')}`
 }
 
 /** How a count stands on every page: 12 345. */

@@ -1,7 +1,7 @@
 import fc from 'fast-check'
 import { describe, expect, it } from 'vitest'
-import { initialView, PLOTS, queryToView, stepsOf, viewFields, viewToQuery, type BenchView } from '../../../app/utils/benchView'
 import { AREA_PANES, MOST_CORNERS } from '../../../app/utils/plotArea'
+import { ABUNDANCE_LAYOUTS, initialView, PLOTS, queryToView, SIGNALS, stepsOf, viewFields, viewToQuery, type BenchView } from '../../../app/utils/benchView'
 import { SORT_KEYS } from '../../../app/utils/featureOrder'
 import { flagKinds } from '../../../shared/schemas/flag'
 import { COUNTED_VERDICTS } from '../../../shared/science/verdict/verdicts'
@@ -16,6 +16,8 @@ const view: fc.Arbitrary<BenchView> = fc.record({
   find: fc.string({ maxLength: 40 }),
   massPpm: fc.integer({ min: 1, max: 100 }),
   sort: fc.record({ key: fc.constantFrom(...SORT_KEYS), descending: fc.boolean() }),
+  abundanceLayout: fc.constantFrom(...ABUNDANCE_LAYOUTS),
+  signal: fc.constantFrom(...SIGNALS),
   plot: fc.constantFrom(...PLOTS),
   area: fc.option(fc.record({ pane: fc.constantFrom(...AREA_PANES), corners: fc.array(fc.tuple(decimals(4, 2000), decimals(4, 2000)), { minLength: 3, maxLength: MOST_CORNERS }) }), { nil: null }),
   foldWindow: fc.option(fc.record({ x: ends, y: ends }), { nil: null }),
