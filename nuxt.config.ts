@@ -72,8 +72,9 @@ export default defineNuxtConfig({
   routeRules: {
     '/**': { headers: { 'cache-control': 'no-store' } },
     '/_nuxt/**': { headers: { 'cache-control': 'public, max-age=31536000, immutable' } },
-    // Counted and refused with a sentence by receiveFile (MAX_TABLE_BYTES in shared/schemas/table).
+    // Counted and refused with a sentence by receiveFile (tableLimit, traceLimit).
     '/api/studies/*/uploads': { security: { requestSizeLimiter: { maxRequestSizeInBytes: 2 ** 40 } } },
+    '/api/studies/*/traces/uploads': { security: { requestSizeLimiter: { maxRequestSizeInBytes: 2 ** 40 } } },
   },
   nitro: {
     compressPublicAssets: true,

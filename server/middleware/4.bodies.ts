@@ -1,6 +1,6 @@
 /** Bytes of a body, whatever the method: the security module looks at POST, PUT and DELETE alone. */
 const MOST_BYTES = 2_000_000
-const UPLOADS = /^\/api\/studies\/[\w-]+\/uploads$/
+const UPLOADS = /^\/api\/studies\/[\w-]+\/(?:traces\/)?uploads$/
 
 /** Every body says its length before it comes (the size limit of each route then holds at once); sign-in's module routes are not ours to use. */
 export default defineEventHandler((event) => {

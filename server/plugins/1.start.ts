@@ -8,9 +8,10 @@ import { addDemoAccounts } from '../domain/demo/addDemoAccounts'
 import { issueFirstCode } from '../domain/person/firstLabLead'
 import { addressProblem, dataFolder, laboratoryKind, ownAddress } from '../utils/environment'
 import { sealingSecret } from '../utils/sealingSecret'
-import { emptyIncoming } from '../domain/table/incoming'
+import { emptyIncoming } from '../domain/upload/incoming'
 import { sweepFiles } from '../domain/table/originals'
 import { dropExpiredUploads } from '../domain/table/removeUpload'
+import { sweepTraceFiles } from '../domain/trace/traceFiles'
 
 /** Opens the laboratory before the first request: folder, lock, migrations, sealing secret, jobs. */
 export default defineNitroPlugin((nitro) => {
@@ -28,6 +29,7 @@ export default defineNitroPlugin((nitro) => {
     const open = await openDatabase(folder, kind, migrations)
     emptyIncoming(folder)
     sweepFiles(open.db, folder)
+    sweepTraceFiles(open.db, folder)
     dropExpiredUploads(open.db, folder)
     // Read by nuxt-auth-utils at each request.
     process.env.NUXT_SESSION_PASSWORD ||= sealingSecret(folder)

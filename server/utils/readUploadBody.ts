@@ -2,7 +2,7 @@ import { Server } from 'node:http'
 import type { Socket } from 'node:net'
 import type { H3Event } from 'h3'
 import { DomainError } from '../domain/DomainError'
-import { checkRoom, receiveFile, type ReceivedFile } from '../domain/table/receiveFile'
+import { checkRoom, receiveFile, tableLimit, type ReceivedFile, type UploadLimit } from '../domain/upload/receiveFile'
 
 /** A sender that is silent for this long is cut off. */
 const SILENCE_MS = 60_000
@@ -11,13 +11,13 @@ const SILENCE_MS = 60_000
  * Streams the request's body to `incoming/`: never in memory, never by `pipeline` (which would destroy the socket before an answer).
  * What is too large or finds no room is refused before it comes where its length is announced.
  */
-export async function readUploadBody(event: H3Event, folder: string): Promise<ReceivedFile> {
+export async function readUploadBody(event: H3Event, folder: string, limit: UploadLimit = tableLimit): Promise<ReceivedFile> {
   const { req } = event.node
   const announced = Number(getRequestHeader(event, 'content-length') ?? Number.NaN)
   const done = liftRequestTimeout(req.socket)
   try {
-    await checkRoom(folder, Number.isFinite(announced) ? announced : null)
-    return await receiveFile(folder, req.iterator({ destroyOnReturn: false }))
+    await checkRoom(folder, Number.isFinite(announced) ? announced : null, limit)
+    return await receiveFile(folder, req.iterator({ destroyOnReturn: false }), limit)
   }
   catch (error) {
     // The rest of the body is not wanted: the connection ends with the answer.
@@ -32,7 +32,7 @@ export async function readUploadBody(event: H3Event, folder: string): Promise<Re
 
 const uploading = new WeakMap<Server, { count: number, timeout: number }>()
 
-/** Node gives a whole request five minutes, a slow line and 64 MB need more: off while uploads run, and silence is watched instead. */
+/** Node gives a whole request five minutes, a slow line and large files need more: off while uploads run, and silence is watched instead. */
 function liftRequestTimeout(socket: Socket): () => void {
   const server: unknown = Reflect.get(socket, 'server')
   socket.setTimeout(SILENCE_MS, () => socket.destroy())

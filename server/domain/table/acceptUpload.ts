@@ -1,37 +1,27 @@
-import { renameSync, rmSync } from 'node:fs'
+import { rmSync } from 'node:fs'
 import { and, eq, inArray, isNull } from 'drizzle-orm'
 import type { UploadQuery } from '../../../shared/schemas/table'
 import type { UploadAnswer } from '../../../shared/types/table'
 import type { Database } from '../../db/open'
 import { tables, uploads } from '../../db/schema'
-import type { Jobs } from '../../jobs/runner'
-import { record } from '../activity/record'
 import { DomainError } from '../DomainError'
 import type { Person } from '../person/person'
-import { receivedPath } from './originals'
-import type { ReceivedFile } from './receiveFile'
-import { uploadLine } from './uploadLine'
-
-export interface UploadPlace { db: Database, folder: string, jobs: Jobs }
+import type { ReceivedFile } from '../upload/receiveFile'
+import { takeFile, type UploadPlace } from '../upload/takeFile'
 
 /**
  * Takes a received file into a study and has it read. Content that the study has already is said and not kept twice,
  * unless it is to replace another table.
  */
-export function acceptUpload({ db, folder, jobs }: UploadPlace, studyId: string, file: ReceivedFile, { name, replaces }: UploadQuery, person: Person): UploadAnswer {
+export function acceptUpload(place: UploadPlace, studyId: string, file: ReceivedFile, { name, replaces }: UploadQuery, person: Person): UploadAnswer {
+  const { db } = place
   try {
     if (file.bytes === 0) throw new DomainError('unreadable', 'The file is empty.')
     if (replaces !== undefined) checkReplaced(db, studyId, replaces)
     const known = knownAs(db, studyId, file.sha256)
     if (known !== null) return { upload: null, known }
-    return db.transaction((tx) => {
-      const upload = tx.insert(uploads).values({ studyId, fileName: name, sha256: file.sha256, bytes: file.bytes, status: 'reading', replacesTableId: replaces ?? null, createdBy: person.id }).returning().get()
-      renameSync(file.path, receivedPath(folder, upload.id))
-      const job = jobs.add({ kind: 'read', studyId, input: { uploadId: upload.id }, personId: person.id }, { unlimited: true })
-      record(tx, { personId: person.id, action: 'upload table', studyId, subjectId: upload.id, detail: name })
-      const row = tx.update(uploads).set({ jobId: job.id }).where(eq(uploads.id, upload.id)).returning().get()
-      return { upload: uploadLine(row), known: null }
-    }, { behavior: 'immediate' })
+    const upload = takeFile(place, { studyId, kind: 'table', fileName: name, sha256: file.sha256, bytes: file.bytes, status: 'reading', replacesTableId: replaces ?? null, createdBy: person.id }, file, uploadId => ({ kind: 'read', input: { uploadId } }))
+    return { upload, known: null }
   }
   finally {
     rmSync(file.path, { force: true })

@@ -6,7 +6,7 @@ import { layouts, uploads } from '../../db/schema'
 import { record } from '../activity/record'
 import { DomainError, notFound } from '../DomainError'
 import type { Person } from '../person/person'
-import type { UploadPlace } from './acceptUpload'
+import type { UploadPlace } from '../upload/takeFile'
 import type { Upload } from './uploadLine'
 
 /**

@@ -1,10 +1,11 @@
 import { and, eq, isNull, ne } from 'drizzle-orm'
 import type { TableChange } from '../../../shared/schemas/table'
 import type { Database } from '../../db/open'
-import { samples, tables } from '../../db/schema'
+import { tables } from '../../db/schema'
 import { record } from '../activity/record'
 import { DomainError, notFound } from '../DomainError'
 import type { Person } from '../person/person'
+import { sampleOfStudy } from '../sample/sampleOfStudy'
 import { touchStudy } from '../study/touchStudy'
 
 /** Sets the sample that a table belongs to, or its peak limit. A sample has one table at a time. */
@@ -14,8 +15,7 @@ export function changeTable(db: Database, studyId: string, tableId: string, chan
     if (!table) throw notFound()
     if (table.replacedAt) throw new DomainError('conflict', 'This table has been replaced: it stays as it is, with the alignments that used it.')
     if (change.sampleId) {
-      const sample = db.select({ name: samples.name }).from(samples).where(and(eq(samples.id, change.sampleId), eq(samples.studyId, studyId))).get()
-      if (!sample) throw new DomainError('invalid', 'That sample is not in the sheet any more.', [{ field: 'sampleId', sentence: 'Choose a sample of this study.' }])
+      const sample = sampleOfStudy(db, studyId, change.sampleId)
       const other = db.select({ fileName: tables.fileName }).from(tables).where(and(eq(tables.sampleId, change.sampleId), isNull(tables.replacedAt), ne(tables.id, tableId))).get()
       if (other) throw new DomainError('conflict', `“${sample.name}” has a table already, ${other.fileName}. Give that one another sample first, or replace it.`, [{ field: 'sampleId', sentence: `“${sample.name}” has a table already.` }])
     }

@@ -28,7 +28,7 @@ export function listTables(db: Database, studyId: string): StudyTables {
     createdAt: row.createdAt.toISOString(), replacedAt: row.replacedAt?.toISOString() ?? null,
   }))
   const open = db.select({ upload: uploads, job: { progress: jobs.progress, message: jobs.message } }).from(uploads).leftJoin(jobs, eq(jobs.id, uploads.jobId))
-    .where(and(eq(uploads.studyId, studyId), ne(uploads.status, 'read'))).orderBy(desc(uploads.createdAt)).all()
+    .where(and(eq(uploads.studyId, studyId), eq(uploads.kind, 'table'), ne(uploads.status, 'read'))).orderBy(desc(uploads.createdAt)).all()
   return { tables: lines, uploads: open.map(row => uploadLine(row.upload, row.job)), samples: db.select({ id: samples.id, name: samples.name }).from(samples).where(eq(samples.studyId, studyId)).orderBy(asc(samples.position)).all() }
 }
 

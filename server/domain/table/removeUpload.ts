@@ -4,14 +4,14 @@ import { uploads } from '../../db/schema'
 import { record } from '../activity/record'
 import { DomainError, notFound } from '../DomainError'
 import type { Person } from '../person/person'
-import type { UploadPlace } from './acceptUpload'
+import type { UploadPlace } from '../upload/takeFile'
 import { releaseOriginal, releaseReceived } from './originals'
 
-/** Takes away a file that waits or was refused, or stops one that is being read for the first time. Tables go by removeTable. */
+/** Takes away a file that waits or was refused, or stops one that is being read for the first time. Tables go by removeTable, traces by removeTrace. */
 export function removeUpload({ db, folder, jobs }: UploadPlace, studyId: string, uploadId: string, person: Person): { id: string } {
   const upload = db.select().from(uploads).where(and(eq(uploads.id, uploadId), eq(uploads.studyId, studyId))).get()
   if (!upload) throw notFound()
-  if (upload.status === 'read') throw new DomainError('conflict', 'This file has been read. Remove its tables instead.')
+  if (upload.status === 'read') throw new DomainError('conflict', upload.kind === 'trace' ? 'This file has been read. Remove its trace instead.' : 'This file has been read. Remove its tables instead.')
   if (upload.status === 'reading' && upload.jobId !== null) jobs.cancel(upload.jobId)
   const after = db.select({ status: uploads.status }).from(uploads).where(eq(uploads.id, uploadId)).get()
   // Read anew, and stopped: the tables of its first reading stand.
