@@ -1,12 +1,12 @@
-import { initialView, MOST_PICKED, type BenchView } from '~/utils/benchView'
-import type { SortKey } from '~/utils/featureOrder'
+import { initialView, isFilteredView, MOST_PICKED, withoutFilter, type BenchView } from '~/utils/benchView'
+import { sortedAlsoBy, sortedBy, type SortKey } from '~/utils/featureOrder'
 import type { Verdict } from '#shared/science/verdict/verdicts'
 
 /** What is selected, picked, filtered, looked for, sorted and drawn on the bench: one truth for plots, bar, table and card. */
 export const useBenchStore = defineStore('bench', {
   state: (): BenchView => initialView(),
   getters: {
-    isFiltered: state => state.verdicts.length > 0 || state.flags !== 'all' || state.find !== '' || state.area !== null,
+    isFiltered: state => isFilteredView(state),
     /** The selected feature first, then those picked beside it. */
     looked: (state): number[] => [...(state.selected === null ? [] : [state.selected]), ...state.picked.filter(each => each !== state.selected)],
   },
@@ -31,14 +31,14 @@ export const useBenchStore = defineStore('bench', {
     },
     /** A second time by the same column turns the order round. */
     sortBy(key: SortKey) {
-      const descending = this.sort.key === key ? !this.sort.descending : key === 'intensity' || key === 'reach'
-      this.sort = { key, descending }
+      this.sort = sortedBy(this.sort, key)
+    },
+    /** Sorts by one more key where those before are equal. */
+    sortAlsoBy(key: SortKey) {
+      this.sort = sortedAlsoBy(this.sort, key)
     },
     clearFilter() {
-      this.verdicts = []
-      this.flags = 'all'
-      this.find = ''
-      this.area = null
+      this.$patch(withoutFilter())
     },
   },
 })

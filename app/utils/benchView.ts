@@ -3,7 +3,10 @@ import { COUNTED_VERDICTS, type Verdict } from '#shared/science/verdict/verdicts
 import { readArea, writeArea, type PlotArea } from '~/utils/plotArea'
 import { readWindow, writeWindow, type PlotWindow } from '~/utils/plotWindow'
 import type { Signal } from '~/charts/sideMeans'
-import { SORT_KEYS, type FeatureSort } from '~/utils/featureOrder'
+import { MOST_SORTS, SORT_KEYS, type FeatureSort } from '~/utils/featureOrder'
+import { readFormula, readMass, writeFormula, writeMass, type FormulaTarget, type MassTarget } from '~/utils/massTarget'
+import { OPEN_RANGE, readRange, writeRange, type NumberRange } from '~/utils/numberRange'
+import { RANGE_FILTERS, RANGE_NAMES, type RangeName } from '~/utils/rangeFilters'
 
 /** One part of what the bench shows, and how the address holds it: undefined where it stands as by default. */
 export interface ViewField<Value> {
@@ -15,6 +18,8 @@ export interface ViewField<Value> {
   write: (value: Value) => string
   /** A change of it is a step that "back" takes back; moving from feature to feature and typing are none. */
   isStep: boolean
+  /** It decides which features are shown; "clear the filter" sets it back. */
+  isFilter?: true
 }
 
 /** Features with or without flags; with any flag; with a flag of one kind. */
@@ -43,19 +48,25 @@ export const viewFields = {
     const read = text.split('.').flatMap(each => featureNumber(each) ?? [])
     return [...new Set(read)].sort((a, b) => a - b).slice(0, MOST_PICKED)
   } }),
-  verdicts: field<Verdict[]>({ initial: [], key: 'verdict', isStep: true, write: value => COUNTED_VERDICTS.filter(name => value.includes(name)).join('.'), read: (text) => {
+  verdicts: field<Verdict[]>({ initial: [], key: 'verdict', isStep: true, isFilter: true, write: value => COUNTED_VERDICTS.filter(name => value.includes(name)).join('.'), read: (text) => {
     const named = text.split('.')
     return COUNTED_VERDICTS.filter(name => named.includes(name))
   } }),
-  flags: field<FlagFilter>({ initial: 'all', key: 'flags', isStep: true, read: text => (['flagged', ...flagKinds] as const).find(name => name === text), write: value => value }),
-  find: field<string>({ initial: '', key: 'find', isStep: false, read: text => text.slice(0, 200), write: value => value }),
+  flags: field<FlagFilter>({ initial: 'all', key: 'flags', isStep: true, isFilter: true, read: text => (['flagged', ...flagKinds] as const).find(name => name === text), write: value => value }),
+  find: field<string>({ initial: '', key: 'find', isStep: false, isFilter: true, read: text => text.slice(0, 200), write: value => value }),
   massPpm: field<number>({ initial: 10, key: 'ppm', isStep: false, read: text => Number(text) > 0 && Number(text) <= 10_000 ? Number(text) : undefined, write: String }),
-  sort: field<FeatureSort>({ initial: { key: 'intensity', descending: true }, key: 'sort', isStep: true, read: sortOf, write: value => `${value.descending ? '-' : ''}${value.key}` }),
   abundanceLayout: field<AbundanceLayout>({ initial: 'preparation', key: 'samples', isStep: true, read: text => ABUNDANCE_LAYOUTS.find(name => name === text), write: value => value }),
   signal: field<Signal>({ initial: 'normalised', key: 'signal', isStep: true, read: text => SIGNALS.find(name => name === text), write: value => value }),
+  /** m/z within so many ppm; m/z of the usual ions of a neutral mass, and of a formula. */
+  mzNear: field<MassTarget | null>({ initial: null, key: 'mz', isStep: true, isFilter: true, read: readMass, write: writeMass }),
+  massNear: field<MassTarget | null>({ initial: null, key: 'mass', isStep: true, isFilter: true, read: readMass, write: writeMass }),
+  formula: field<FormulaTarget | null>({ initial: null, key: 'formula', isStep: true, isFilter: true, read: readFormula, write: writeFormula }),
+  ...rangeFields(),
+  /** Never empty; the first foremost. */
+  sort: field<FeatureSort[]>({ initial: [{ key: 'intensity', descending: true }], key: 'sort', isStep: true, read: sortsOf, write: value => value.map(({ key, descending }) => `${descending ? '-' : ''}${key}`).join('.') }),
   plot: field<Plot>({ initial: 'fold', key: 'plot', isStep: true, read: text => PLOTS.find(name => name === text), write: value => value }),
   /** The features inside an area drawn on the fold-change plot; null: all. */
-  area: field<PlotArea | null>({ initial: null, key: 'area', isStep: true, read: readArea, write: writeArea }),
+  area: field<PlotArea | null>({ initial: null, key: 'area', isStep: true, isFilter: true, read: readArea, write: writeArea }),
   /** The part of the plot of ratios that is shown; null: all of it. */
   foldWindow: field<PlotWindow | null>({ initial: null, key: 'window', isStep: false, read: readWindow, write: writeWindow }),
   /** Every plot shows the surroundings of the selected feature, and follows it. */
@@ -92,6 +103,18 @@ export function queryToView(query: Record<string, unknown>): BenchView {
   return view
 }
 
+const FILTERS = entries.filter(([, { isFilter }]) => isFilter)
+
+/** Do filters stand that take features away? */
+export function isFilteredView(view: BenchView): boolean {
+  return FILTERS.some(([name, { initial, write }]) => write(view[name]) !== write(initial))
+}
+
+/** Every filter as it opens. */
+export function withoutFilter(): Partial<BenchView> {
+  return structuredClone(Object.fromEntries(FILTERS.map(([name, { initial }]) => [name, initial])))
+}
+
 /** What of a view makes a step of the history, as one text. */
 export function stepsOf(view: BenchView): string {
   return JSON.stringify(entries.filter(([, { isStep }]) => isStep).map(([name]) => view[name]))
@@ -101,8 +124,16 @@ function featureNumber(text: string): number | undefined {
   return /^[1-9]\d{0,8}$/.test(text) ? Number(text) - 1 : undefined
 }
 
-function sortOf(text: string): FeatureSort | undefined {
-  const descending = text.startsWith('-')
-  const key = SORT_KEYS.find(name => name === text.slice(descending ? 1 : 0))
-  return key && { key, descending }
+function rangeFields(): Record<RangeName, ViewField<NumberRange>> {
+  return Object.fromEntries(RANGE_NAMES.map(name => [name, field<NumberRange>({ initial: { ...OPEN_RANGE }, key: RANGE_FILTERS[name].key, isStep: true, isFilter: true, read: readRange, write: writeRange })])) as Record<RangeName, ViewField<NumberRange>>
+}
+
+function sortsOf(text: string): FeatureSort[] | undefined {
+  const sorts = new Map<FeatureSort['key'], FeatureSort>()
+  for (const part of text.split('.')) {
+    const descending = part.startsWith('-')
+    const key = SORT_KEYS.find(name => name === part.slice(descending ? 1 : 0))
+    if (key && !sorts.has(key)) sorts.set(key, { key, descending })
+  }
+  return sorts.size > 0 ? [...sorts.values()].slice(0, MOST_SORTS) : undefined
 }

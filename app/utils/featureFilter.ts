@@ -1,31 +1,23 @@
 import type { VerdictColumns } from '#shared/science/verdict/verdictResult'
 import { VERDICT, VERDICTS, type Verdict } from '#shared/science/verdict/verdicts'
-import { searchRule, type FeatureSearch } from '~/utils/featureSearch'
+
+/** Does a feature pass? */
+export type FeatureRule = (feature: number) => boolean
 
 export interface FeatureFilter {
   /** Empty: all that are compared. */
   verdicts: readonly Verdict[]
-  /** Null: flagged or not. */
-  flagged: ReadonlySet<number> | null
-  search: FeatureSearch | null
-  /** Does the feature lie inside the area drawn? Null: anywhere. */
-  inside?: ((feature: number) => boolean) | null
-  /** More words of a feature that a search may meet. */
-  said: (feature: number) => string
+  /** A feature passes where all of them say so. */
+  rules: readonly FeatureRule[]
 }
 
 /** The features of `order` that pass the filter, in that order. A feature in neither side is never among them. */
-export function filterFeatures(columns: VerdictColumns, order: Int32Array, filter: FeatureFilter): Int32Array {
-  const wanted = VERDICTS.map(name => name !== 'inNeither' && (filter.verdicts.length === 0 || filter.verdicts.includes(name)))
-  const found = filter.search ? searchRule(filter.search, columns, filter.said) : null
+export function filterFeatures(columns: VerdictColumns, order: Int32Array, { verdicts, rules }: FeatureFilter): Int32Array {
+  const wanted = VERDICTS.map(name => name !== 'inNeither' && (verdicts.length === 0 || verdicts.includes(name)))
   const rows = new Int32Array(order.length)
   let count = 0
   for (const i of order) {
-    if (!wanted[columns.verdict[i] ?? VERDICT.inNeither]) continue
-    if (filter.flagged && !filter.flagged.has(i)) continue
-    if (filter.inside && !filter.inside(i)) continue
-    if (found && !found(i)) continue
-    rows[count++] = i
+    if (wanted[columns.verdict[i] ?? VERDICT.inNeither] && rules.every(passes => passes(i))) rows[count++] = i
   }
   return rows.slice(0, count)
 }

@@ -46,7 +46,17 @@ describe('the feature table', () => {
     await header?.get('button').trigger('click')
     expect(header?.attributes('aria-sort')).toBe('ascending')
     await header?.get('button').trigger('click')
-    expect(useBenchStore().sort).toEqual({ key: 'mz', descending: true })
+    expect(useBenchStore().sort).toEqual([{ key: 'mz', descending: true }])
+  })
+
+  it('sorts by a further column with Shift, and shows the place of each', async () => {
+    const table = await mountSuspended(FeatureTable, { props })
+    const header = (label: string) => table.findAll('[role=columnheader]').find(cell => cell.text().startsWith(label))
+    await header('reach')?.get('button').trigger('click')
+    await header('min')?.get('button').trigger('click', { shiftKey: true })
+    expect(useBenchStore().sort).toEqual([{ key: 'reach', descending: true }, { key: 'minutes', descending: false }])
+    expect([header('reach')?.text(), header('min')?.text()]).toEqual(['reach ↓1', 'min ↑2'])
+    expect(header('min')?.attributes('aria-sort')).toBeUndefined()
   })
 
   it('steps by keys', async () => {

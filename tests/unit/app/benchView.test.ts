@@ -1,13 +1,18 @@
 import fc from 'fast-check'
 import { describe, expect, it } from 'vitest'
+import { ABUNDANCE_LAYOUTS, initialView, isFilteredView, PLOTS, queryToView, SIGNALS, stepsOf, viewFields, viewToQuery, withoutFilter, type BenchView } from '../../../app/utils/benchView'
 import { AREA_PANES, MOST_CORNERS } from '../../../app/utils/plotArea'
-import { ABUNDANCE_LAYOUTS, initialView, PLOTS, queryToView, SIGNALS, stepsOf, viewFields, viewToQuery, type BenchView } from '../../../app/utils/benchView'
-import { SORT_KEYS } from '../../../app/utils/featureOrder'
+import { MOST_SORTS, SORT_KEYS } from '../../../app/utils/featureOrder'
+import { OPEN_RANGE } from '../../../app/utils/numberRange'
 import { flagKinds } from '../../../shared/schemas/flag'
 import { COUNTED_VERDICTS } from '../../../shared/science/verdict/verdicts'
 
 const decimals = (places: number, largest: number) => fc.integer({ min: -largest * 10 ** places, max: largest * 10 ** places }).map(value => value / 10 ** places)
 const ends = fc.tuple(decimals(3, 400), fc.integer({ min: 20, max: 400_000 })).map(([low, by]): [number, number] => [low, Number((low + by / 1000).toFixed(3))])
+const bound = fc.option(fc.double({ noNaN: true, noDefaultInfinity: true }).map(value => value + 0), { nil: null })
+const range = fc.record({ from: bound, to: bound })
+const ppm = fc.integer({ min: 1, max: 10_000 })
+const mass = fc.option(fc.record({ value: fc.double({ min: 1, max: 99_999, noNaN: true }), ppm }), { nil: null })
 const view: fc.Arbitrary<BenchView> = fc.record({
   selected: fc.option(fc.nat(999_999), { nil: null }),
   picked: fc.uniqueArray(fc.nat(999_999), { maxLength: 100 }).map(all => all.sort((a, b) => a - b)),
@@ -15,9 +20,13 @@ const view: fc.Arbitrary<BenchView> = fc.record({
   flags: fc.constantFrom('all' as const, 'flagged' as const, ...flagKinds),
   find: fc.string({ maxLength: 40 }),
   massPpm: fc.integer({ min: 1, max: 100 }),
-  sort: fc.record({ key: fc.constantFrom(...SORT_KEYS), descending: fc.boolean() }),
   abundanceLayout: fc.constantFrom(...ABUNDANCE_LAYOUTS),
   signal: fc.constantFrom(...SIGNALS),
+  mzNear: mass,
+  massNear: mass,
+  formula: fc.option(fc.record({ formula: fc.constantFrom('C21H24O10', 'C6 H12 O6', 'C2H4(OH)2'), ppm }), { nil: null }),
+  mzRange: range, minutes: range, ratio: range, fold: range, q: range, reach: range, intensity: range,
+  sort: fc.uniqueArray(fc.record({ key: fc.constantFrom(...SORT_KEYS), descending: fc.boolean() }), { minLength: 1, maxLength: MOST_SORTS, selector: each => each.key }),
   plot: fc.constantFrom(...PLOTS),
   area: fc.option(fc.record({ pane: fc.constantFrom(...AREA_PANES), corners: fc.array(fc.tuple(decimals(4, 2000), decimals(4, 2000)), { minLength: 3, maxLength: MOST_CORNERS }) }), { nil: null }),
   foldWindow: fc.option(fc.record({ x: ends, y: ends }), { nil: null }),
@@ -31,6 +40,28 @@ describe('the address of the bench', () => {
     }))
   })
 
+  it('names each part otherwise', () => {
+    const keys = Object.values(viewFields).map(({ key }) => key)
+    expect(new Set([...keys, 'version']).size).toBe(keys.length + 1)
+  })
+
+  it('holds several keys of a sort, each once, the first foremost', () => {
+    expect(viewToQuery({ ...initialView(), sort: [{ key: 'reach', descending: true }, { key: 'mz', descending: false }] }).sort).toBe('-reach.mz')
+    expect(queryToView({ sort: '-reach.mz.reach.nothing' }).sort).toEqual([{ key: 'reach', descending: true }, { key: 'mz', descending: false }])
+    expect(queryToView({ sort: 'nothing' }).sort).toEqual(initialView().sort)
+  })
+
+  it('knows whether filters stand, and clears them all', () => {
+    fc.assert(fc.property(view, (each) => {
+      const cleared = { ...each, ...withoutFilter() }
+      expect(isFilteredView(cleared)).toBe(false)
+      expect(isFilteredView(each)).toBe(Object.keys(withoutFilter()).some(name => JSON.stringify(each[name as keyof BenchView]) !== JSON.stringify(cleared[name as keyof BenchView])))
+      expect(cleared.sort).toEqual(each.sort)
+    }))
+    for (const part of [{ q: { from: null, to: 0.05 } }, { formula: { formula: 'C6H12O6', ppm: 5 } }, { verdicts: ['level' as const] }]) expect(isFilteredView({ ...initialView(), ...part })).toBe(true)
+    expect(initialView().q).toEqual(OPEN_RANGE)
+  })
+
   it('is empty for the view as it opens', () => {
     expect(Object.values(viewToQuery(initialView())).filter(Boolean)).toEqual([])
   })
@@ -38,7 +69,8 @@ describe('the address of the bench', () => {
   it('takes any query without harm', () => {
     fc.assert(fc.property(fc.dictionary(fc.constantFrom(...Object.values(viewFields).map(({ key }) => key)), fc.oneof(fc.string(), fc.constant(null), fc.array(fc.string()))), (query) => {
       const read = queryToView(query)
-      expect(SORT_KEYS).toContain(read.sort.key)
+      expect(read.sort.length).toBeGreaterThan(0)
+      for (const { key } of read.sort) expect(SORT_KEYS).toContain(key)
       expect(read.massPpm).toBeGreaterThan(0)
       expect(queryToView(viewToQuery(read))).toEqual(read)
     }))

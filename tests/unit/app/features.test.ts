@@ -8,14 +8,15 @@ import { manyVerdicts } from '../../support/manyFeatures'
 
 const { result } = manyVerdicts(2000)
 const { columns } = result
-const all: FeatureFilter = { verdicts: [], flagged: null, search: null, said: () => '' }
-const order = orderFeatures(columns, { key: 'number', descending: false })
+const all: FeatureFilter = { verdicts: [], rules: [] }
+const flags = new Map([[3, [1]], [8, [1, 2]]])
+const order = orderFeatures(columns, [])
 
 describe('order of features', () => {
   it.each(SORT_KEYS)('by %s: every feature once, values in order, none last', (key) => {
-    const values = sortValues(columns, key)
+    const values = sortValues(columns, key, flags)
     for (const descending of [false, true]) {
-      const sorted = orderFeatures(columns, { key, descending })
+      const sorted = orderFeatures(columns, [{ key, descending }], flags)
       expect([...sorted].sort((i, j) => i - j)).toEqual([...order])
       for (let row = 1; row < sorted.length; row++) {
         const [before, here] = [values[sorted[row - 1]!]!, values[sorted[row]!]!]
@@ -25,8 +26,21 @@ describe('order of features', () => {
     }
   })
 
+  it('goes by further keys where the first are equal', () => {
+    const sorted = orderFeatures(columns, [{ key: 'verdict', descending: true }, { key: 'q', descending: false }, { key: 'mz', descending: true }])
+    const [place, { q, mz }] = [sortValues(columns, 'verdict'), columns]
+    for (let row = 1; row < sorted.length; row++) {
+      const [i, j] = [sorted[row - 1]!, sorted[row]!]
+      expect(place[i]).toBeGreaterThanOrEqual(place[j]!)
+      if (place[i] !== place[j]) continue
+      if (Number.isNaN(q[i])) expect(q[j]).toBeNaN()
+      else if (!Number.isNaN(q[j])) expect(q[i]).toBeLessThanOrEqual(q[j]!)
+      if (Object.is(q[i], q[j])) expect(mz[i]).toBeGreaterThanOrEqual(mz[j]!)
+    }
+  })
+
   it('keeps equal ones by their number', () => {
-    const sorted = orderFeatures(columns, { key: 'verdict', descending: true })
+    const sorted = orderFeatures(columns, [{ key: 'verdict', descending: true }])
     for (let row = 1; row < sorted.length; row++) {
       if (columns.verdict[sorted[row - 1]!] === columns.verdict[sorted[row]!]) expect(sorted[row]).toBeGreaterThan(sorted[row - 1]!)
     }
@@ -36,24 +50,25 @@ describe('order of features', () => {
 describe('filter of features', () => {
   it('leaves out what is in neither side, and only that', () => {
     const bare = manyVerdicts(300, { settings: {} }).result.columns
-    const rows = filterFeatures(bare, orderFeatures(bare, { key: 'mz', descending: false }), all)
+    const rows = filterFeatures(bare, orderFeatures(bare, [{ key: 'mz', descending: false }]), all)
     expect(rows.length).toBe([...bare.verdict].filter(code => code !== VERDICT.inNeither).length)
   })
 
   it('keeps the order and passes the chosen verdicts', () => {
-    const byMz = orderFeatures(columns, { key: 'mz', descending: true })
+    const byMz = orderFeatures(columns, [{ key: 'mz', descending: true }])
     const rows = filterFeatures(columns, byMz, { ...all, verdicts: ['onlyA', 'level'] })
     expect(rows.length).toBe(result.counts.onlyA + result.counts.level)
     expect([...rows]).toEqual([...byMz].filter(i => columns.verdict[i] === VERDICT.onlyA || columns.verdict[i] === VERDICT.level))
   })
 
-  it('passes flagged features only where asked', () => {
-    expect([...filterFeatures(columns, order, { ...all, flagged: new Set([5, 9]) })]).toEqual([5, 9].filter(i => columns.verdict[i] !== VERDICT.inNeither))
-    expect(filterFeatures(columns, order, { ...all, flagged: new Set() })).toHaveLength(0)
+  it('passes what every rule passes', () => {
+    const rules = [(i: number) => i % 2 === 1, (i: number) => i < 10]
+    expect([...filterFeatures(columns, order, { ...all, rules })]).toEqual([1, 3, 5, 7, 9].filter(i => columns.verdict[i] !== VERDICT.inNeither))
+    expect(filterFeatures(columns, order, { ...all, rules: [...rules, () => false] })).toHaveLength(0)
   })
 
   it('gives the same features in another order', () => {
-    const byRatio = orderFeatures(columns, { key: 'ratio', descending: true })
+    const byRatio = orderFeatures(columns, [{ key: 'ratio', descending: true }])
     const filter: FeatureFilter = { ...all, verdicts: ['moreA', 'unsettled'] }
     expect(inOrder(filterFeatures(columns, order, filter), byRatio)).toEqual(filterFeatures(columns, byRatio, filter))
   })

@@ -8,7 +8,7 @@ import { manyVerdicts } from '../../support/manyFeatures'
 const { columns } = manyVerdicts(3000).result
 const points = placeFeatures(columns)
 const order = Int32Array.from({ length: 3000 }, (_, i) => i)
-const inside = (area: Parameters<typeof areaRule>[1]) => filterFeatures(columns, order, { verdicts: [], flagged: null, search: null, said: () => '', inside: areaRule(points, area) })
+const inside = (area: Parameters<typeof areaRule>[1]) => filterFeatures(columns, order, { verdicts: [], rules: [areaRule(points, area)] })
 
 describe('an area of the fold-change plot', () => {
   it('holds the features whose marks lie inside, and no other', () => {
