@@ -9,6 +9,9 @@ export type ComparisonData = Omit<SideInput, 'normaliseByAmount'>
 export function packComparisonData(data: ComparisonData): Uint8Array<ArrayBuffer> {
   const columns: Columns = { mz: data.mz, retentionMinutes: data.retentionMinutes, neighbourStart: data.neighbourStart, neighbourList: data.neighbourList }
   data.intensity.forEach((values, position) => { columns[`intensity${position}`] = values })
+  data.traceMaxima?.forEach((values, position) => {
+    if (values) columns[`traceMaxima${position}`] = values
+  })
   return packColumns({ samples: data.samples.map(sample => ({ ...sample, floor: Number.isNaN(sample.floor) ? null : sample.floor })) }, columns)
 }
 
@@ -19,6 +22,7 @@ export function unpackComparisonData(bytes: ArrayBuffer | Uint8Array): Compariso
   return {
     samples,
     intensity: samples.map((_, position) => columnOf(columns, `intensity${position}`, Float64Array)),
+    traceMaxima: samples.map((_, position) => columns[`traceMaxima${position}`] ? columnOf(columns, `traceMaxima${position}`, Float64Array) : null),
     mz: columnOf(columns, 'mz', Float64Array),
     retentionMinutes: columnOf(columns, 'retentionMinutes', Float64Array),
     neighbourStart: columnOf(columns, 'neighbourStart', Int32Array),

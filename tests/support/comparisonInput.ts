@@ -13,6 +13,8 @@ export const none = Number.NaN
 export interface Written extends Partial<ComparedSample> {
   name: string
   values: readonly number[]
+  /** Highest signals in its trace; absent: it has none. */
+  trace?: readonly number[]
 }
 
 const plain: Omit<ComparedSample, 'id' | 'name'> = {
@@ -20,9 +22,9 @@ const plain: Omit<ComparedSample, 'id' | 'name'> = {
   runOrder: null, batch: null, floor: 100, floorSource: 'stated', gapFilled: false, measure: 'area',
 }
 
-export const onA = (name: string, values: readonly number[], rest: Partial<ComparedSample> = {}): Written => ({ name, values, side: 'A', ...rest })
-export const onB = (name: string, values: readonly number[], rest: Partial<ComparedSample> = {}): Written => ({ name, values, side: 'B', ...rest })
-export const blank = (name: string, values: readonly number[], rest: Partial<ComparedSample> = {}): Written => ({ name, values, kind: 'solventBlank', amount: null, ...rest })
+export const onA = (name: string, values: readonly number[], rest: Partial<Written> = {}): Written => ({ name, values, side: 'A', ...rest })
+export const onB = (name: string, values: readonly number[], rest: Partial<Written> = {}): Written => ({ name, values, side: 'B', ...rest })
+export const blank = (name: string, values: readonly number[], rest: Partial<Written> = {}): Written => ({ name, values, kind: 'solventBlank', amount: null, ...rest })
 
 /** Input of a comparison: features at m/z 200, 201 … and minutes 1, 2 …; `neighbours` lists pairs that lie within tolerance. */
 export function comparisonInput(written: readonly Written[], options: { neighbours?: [number, number][], normaliseByAmount?: boolean } = {}): SideInput {
@@ -31,8 +33,9 @@ export function comparisonInput(written: readonly Written[], options: { neighbou
   const neighbourStart = new Int32Array(features + 1)
   beside.forEach((list, i) => { neighbourStart[i + 1] = (neighbourStart[i] ?? 0) + list.length })
   return {
-    samples: written.map(({ values: _, ...rest }) => ({ ...plain, id: rest.name, ...rest })),
+    samples: written.map(({ values: _, trace: __, ...rest }) => ({ ...plain, id: rest.name, ...rest })),
     intensity: written.map(({ values }) => Float64Array.from(values)),
+    traceMaxima: written.map(({ trace }) => trace ? Float64Array.from(trace) : null),
     mz: Float64Array.from({ length: features }, (_, i) => 200 + i),
     retentionMinutes: Float64Array.from({ length: features }, (_, i) => 1 + i),
     neighbourStart,

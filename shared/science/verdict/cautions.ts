@@ -4,6 +4,7 @@ import { isUnprovable } from './floors'
 import { counted, threeDigits, times } from '../numeric/numberWords'
 import type { ComparedSample, ComparisonSettings } from './settings'
 import type { SideSummary } from './sideSummary'
+import { traceCautions } from './traceCautions'
 import type { VerdictResult } from './verdictResult'
 
 /** Factors further apart than this may leave the range in which the detector answers in proportion. */
@@ -21,6 +22,7 @@ export function cautionsOf(summary: SideSummary, settings: ComparisonSettings, d
     ...measureCautions(compared),
     ...blankCautions(summary),
     ...floorCautions(compared),
+    ...traceCautions(summary),
     ...designCautions(compared),
   ]
 }

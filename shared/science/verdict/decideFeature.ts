@@ -56,6 +56,8 @@ function decideOneSided({ summary, settings, floors, columns }: Deciding, i: num
   const outcome = oneSided(summary, settings, i, shown, floors, blankCountsAsFloor)
   columns.reach[i] = outcome.reach
   columns.neighbour[i] = outcome.neighbour
+  columns.traceRatio[i] = outcome.trace.ratio
+  columns.traceSamples[i] = outcome.trace.samples
   return decided(columns, i, outcome.verdict, outcome.reason)
 }
 

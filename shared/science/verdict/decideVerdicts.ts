@@ -32,6 +32,8 @@ export function decideVerdicts(summary: SideSummary, settings: ComparisonSetting
     columns: withSummary(columns, summary),
     preparationsA: a.preparations,
     preparationsB: b.preparations,
+    samplesA: a.traces.samples,
+    samplesB: b.traces.samples,
     counts: countVerdicts(columns.verdict),
     ...ratios,
   }

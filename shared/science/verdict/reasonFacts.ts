@@ -7,7 +7,7 @@ import type { VerdictResult } from './verdictResult'
 export interface SideNames { a: string, b: string }
 
 /** What a sentence is told from: the stored columns and the number of preparations. */
-export type Judged = Pick<VerdictResult, 'columns' | 'preparationsA' | 'preparationsB'>
+export type Judged = Pick<VerdictResult, 'columns' | 'preparationsA' | 'preparationsB' | 'samplesA' | 'samplesB'>
 
 /** Phrases about one feature, made when a sentence asks for them. */
 export class ReasonFacts {
@@ -41,6 +41,21 @@ export class ReasonFacts {
 
   get hiddenFloor() { return this.hiddenIsBlank ? `the blank's level in ${this.hidden.name}` : `the highest floor of ${this.hidden.name}` }
   get oneInjection() { return this.shown.injections === 1 ? ' It rests on one injection.' : '' }
+  /** "Tallow Lane's trace (3 of 3 samples)": the traces of the side that counts as not found. */
+  get hiddenTrace() {
+    const samples = this.hiddenSide === 'a' ? this.judged.samplesA : this.judged.samplesB
+    return `${this.hidden.name}'s trace (${this.columns.traceSamples[this.i]!} of ${counted(samples, 'sample')})`
+  }
+
+  /** What the trace of the side that does not list it says; ends an absence that holds. */
+  get traceSeen() {
+    if (this.hiddenIsBlank) return 'No trace was asked: the signal there is listed, and was judged against the blank.'
+    if (this.columns.traceSamples[this.i] === 0) return 'No trace to check.'
+    const ratio = this.columns.traceRatio[this.i]!
+    if (Number.isNaN(ratio)) return `${this.hiddenTrace} can't be checked: there is no trace of ${this.shown.name} with a signal there to measure by, and its tables do not give heights.`
+    return `Trace seen: ${this.hiddenTrace} shows ${ratio > 0 ? `at most ${times(ratio)} of ${this.shown.name}'s` : 'nothing'} there.`
+  }
+
   get minutes() { return this.columns.retentionMinutes[this.i]!.toFixed(2) }
   get window() {
     const minutes = this.columns.retentionMinutes[this.i]!

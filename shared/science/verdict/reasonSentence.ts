@@ -15,7 +15,7 @@ const SENTENCES: Record<Reason, (facts: ReasonFacts) => string> = {
   intensityLimit: f => `Its highest intensity in any table, ${threeDigits(f.columns.highestCounts[f.i]!)}, does not reach the intensity limit of ${threeDigits(f.settings.intensityLimit ?? 0)}.`,
   blankBorne: f => `Blank-borne: ${f.againstBlank('a')}, ${f.againstBlank('b')}; at least ${times(f.settings.blankRatio)} is asked of one side.`,
   byHand: f => `Set aside by hand: ${f.settings.setAsideByHand.find(({ index }) => index === f.i)?.reason || 'no reason given'}.`,
-  foundOnly: f => `Found in ${f.shown.found}, ${f.hiddenPhrase}. It stands ${times(f.columns.reach[f.i]!)} above ${f.hiddenFloor} (at least ${times(f.settings.reachLimit)} is asked), so it would have been seen there. No trace to check.${f.oneInjection}`,
+  foundOnly: f => `Found in ${f.shown.found}, ${f.hiddenPhrase}. It stands ${times(f.columns.reach[f.i]!)} above ${f.hiddenFloor} (at least ${times(f.settings.reachLimit)} is asked), so it would have been seen there. ${f.traceSeen}${f.oneInjection}`,
   neighbour: f => `Found in ${f.shown.found}, ${f.hiddenPhrase}; but the feature beside it${f.neighbourPlace}, within the tolerances, holds ${f.hidden.name}. They may be the same.`,
   gapFilled: f => Number.isNaN(f.columns.atLeast[f.i]!)
     ? `Found in ${f.shown.found}, ${f.hiddenPhrase}; but a table here seems gap-filled and states no floor, so an empty cell does not mean that nothing was there.`
@@ -35,5 +35,6 @@ const SENTENCES: Record<Reason, (facts: ReasonFacts) => string> = {
   smallButCertain: f => `${f.ratio}; a difference is certain (${f.q}), but whether it reaches ${f.fold} is open. ${f.interval}.`,
   assumedBetween: f => `${f.ratio}; ${f.assumed}, at least ${foldTimes(f.assumedLimit)} is called more and ${f.assumedLevelPhrase}. ${f.interval}.`,
   noSpread: f => `${f.ratio}, but there is no spread between replicates: the same data twice?`,
+  signalInTrace: f => `Found in ${f.shown.found}, ${f.hiddenPhrase}; but a signal stands in ${f.hiddenTrace} that its table does not list: up to ${times(f.columns.traceRatio[f.i]!)} of ${f.shown.name}'s there, and less than ${times(1 / f.settings.reachLimit)} is asked.`,
   blankOverlap: f => `Found in ${f.shown.found}, ${f.hiddenPhrase}; but ${f.shown.name} holds only ${times(f.shown.level / f.hidden.level)} of what ${f.hidden.name} shows, and at least ${times(f.settings.reachLimit)} is asked.`,
 }

@@ -8,6 +8,7 @@ export const REASONS = [
   'levelTested', 'levelSmallDifference', 'levelAssumed',
   'notCertain', 'smallNotLevel', 'smallButCertain', 'assumedBetween', 'noSpread',
   'blankOverlap',
+  'signalInTrace',
 ] as const
 export type Reason = (typeof REASONS)[number]
 
@@ -38,6 +39,7 @@ export const REASON_LABELS: Record<Reason, string> = {
   assumedBetween: 'between limits, precision assumed',
   noSpread: 'no spread between replicates',
   blankOverlap: 'near the other side, which is not above blank',
+  signalInTrace: 'a signal stands in the other side\'s trace',
 }
 
 /** How a ratio was judged. Codes are stored: append, never reorder. */

@@ -2,6 +2,7 @@ import type { AmountField } from '../normalisation/amountFactors'
 import type { Preparation } from './preparations'
 import type { ComparedSample } from './settings'
 import type { SideStatistics } from './sideStatistics'
+import type { SideTraces } from './sideTraces'
 
 /** What summariseSides reads. `intensity` has one column a sample, NaN = not detected; the rest is of the alignment. */
 export interface SideInput {
@@ -13,6 +14,8 @@ export interface SideInput {
   neighbourStart: Int32Array
   neighbourList: Int32Array
   normaliseByAmount: boolean
+  /** One a sample: the highest signal of each feature in its trace, counts; 0: nothing there, NaN: not covered. Null, or absent: no trace. */
+  traceMaxima?: readonly (Float64Array | null)[]
 }
 
 /** One side, before any limit is applied. */
@@ -25,6 +28,9 @@ export interface SummarisedSide extends SideStatistics {
   blankScale: number
   /** The neighbour that this side holds most of; -1: none of the neighbours holds this side. */
   neighbour: Int32Array
+  traces: SideTraces
+  /** All its tables state peak heights. */
+  allHeights: boolean
 }
 
 /** All of a comparison that does not depend on its limits: made once, then decideVerdicts is quick. */

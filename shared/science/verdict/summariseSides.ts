@@ -5,6 +5,7 @@ import { chooseSamples } from './chooseSamples'
 import { groupPreparations } from './preparations'
 import type { SideInput, SideSummary, SummarisedSide } from './sideSummary'
 import { preparationLog2, sideStatistics, type SideStatistics } from './sideStatistics'
+import { sideTraces } from './sideTraces'
 
 /**
  * First of two stages: normalises, averages injections of one preparation in log2, and gathers per feature
@@ -33,6 +34,8 @@ export function summariseSides(input: SideInput): SideSummary {
       injectedSignal: chosen.blankKind ? signalOf(positions) : new Float64Array(features).fill(Number.NaN),
       blankScale: Math.max(...positions.map(index => (chosen.factor[index] ?? Number.NaN) * (blankPerUl ? samples[index]?.injectionUl ?? 1 : 1))),
       neighbour: strongestNeighbour(statistics, input),
+      traces: sideTraces(own, chosen.factor, input.traceMaxima ?? [], features),
+      allHeights: positions.every(index => samples[index]?.measure === 'height'),
     }
   }
   const a = sideOf('A')

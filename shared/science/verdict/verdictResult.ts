@@ -31,6 +31,12 @@ export interface VerdictColumns {
   reach: Float64Array
   /** "At least": lowest of the present side over everything on the other (a ratio, not log2). */
   atLeast: Float64Array
+  /**
+   * Of one-sided features: highest signal in the other side's traces over the level of the present side (NaN: not checked), and
+   * how many of the other side's samples have a trace that covers the feature.
+   */
+  traceRatio: Float64Array
+  traceSamples: Uint16Array
   /** Side over blanks, injected signal; NaN where no blank detects it. */
   blankRatioA: Float64Array
   blankRatioB: Float64Array
@@ -42,6 +48,9 @@ export interface VerdictResult {
   columns: VerdictColumns
   preparationsA: number
   preparationsB: number
+  /** Samples compared, injections counted one by one. */
+  samplesA: number
+  samplesB: number
   counts: Record<Verdict, number>
   /** Features with a p-value: the number that the false discovery rate counts. */
   testedFeatures: number
@@ -67,6 +76,6 @@ export function emptyColumns(features: number) {
     notAboveBlank: new Uint8Array(features),
     neighbour: new Int32Array(features).fill(-1),
     log2Ratio: numbers(), low: numbers(), high: numbers(), p: numbers(), q: numbers(), equivalenceP: numbers(),
-    reach: numbers(), atLeast: numbers(), blankRatioA: numbers(), blankRatioB: numbers(),
+    reach: numbers(), atLeast: numbers(), traceRatio: numbers(), traceSamples: new Uint16Array(features), blankRatioA: numbers(), blankRatioB: numbers(),
   }
 }

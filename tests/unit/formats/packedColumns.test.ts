@@ -3,6 +3,9 @@ import { describe, expect, it } from 'vitest'
 import { packComparisonData, unpackComparisonData } from '../../../shared/formats/comparisonData'
 import { columnOf, packColumns, unpackColumns } from '../../../shared/formats/packedColumns'
 import { packVerdicts, unpackVerdicts } from '../../../shared/formats/verdictColumns'
+import { reasonSentence } from '../../../shared/science/verdict/reasonSentence'
+import { REASON } from '../../../shared/science/verdict/reasons'
+import { comparisonDefaults } from '../../../shared/science/verdict/settings'
 import { comparisonInput, judge, none, onA, onB } from '../../support/comparisonInput'
 
 describe('packed columns', () => {
@@ -37,11 +40,32 @@ describe('packed verdicts', () => {
     const { result } = judge([onA('a1', [1000, 500, none]), onA('a2', [1100, none, none]), onB('b1', [4000, none, none]), onB('b2', [3900, none, none])])
     expect(unpackVerdicts(packVerdicts(result))).toEqual(result)
   })
+
+  it('come back with what traces show', () => {
+    const { result } = judge([onA('a1', [1000, 1000], { trace: [500, 500] }), onB('b1', [none, none], { trace: [none, 20] })])
+    expect([...result.columns.traceRatio]).toEqual([none, 0.04])
+    expect(unpackVerdicts(packVerdicts(result))).toEqual(result)
+  })
+
+  it('saved before traces were looked into: nothing was checked', () => {
+    const { result } = judge([onA('a1', [1000, 500], { trace: [9, 9] }), onB('b1', [none, none], { trace: [9, 9] })])
+    const { meta, columns: { traceRatio: _, traceSamples: __, ...columns } } = unpackColumns(packVerdicts(result))
+    const { samplesA: ___, samplesB: ____, ...earlier } = meta as typeof result
+    const read = unpackVerdicts(packColumns(earlier, columns))
+    expect(read).toEqual({ ...result, samplesA: 0, samplesB: 0, columns: { ...result.columns, traceRatio: Float64Array.of(none, none), traceSamples: Uint16Array.of(0, 0) } })
+    expect(reasonSentence(0, { ...read, columns: { ...read.columns, reason: Uint8Array.of(REASON.foundOnly ?? 0, 0) } }, comparisonDefaults, { a: 'Millrace', b: 'Tallow Lane' })).toMatch(/No trace to check\. It rests on one injection\.$/)
+  })
 })
 
 describe('packed comparison data', () => {
   it('come back whole, a floor that is not known too', () => {
-    const { normaliseByAmount: _, ...data } = comparisonInput([onA('a1', [1000, none], { floor: none }), onB('b1', [1, 2])], { neighbours: [[0, 1]] })
+    const { normaliseByAmount: _, ...data } = comparisonInput([onA('a1', [1000, none], { floor: none, trace: [0, none] }), onB('b1', [1, 2])], { neighbours: [[0, 1]] })
     expect(unpackComparisonData(packComparisonData(data))).toEqual(data)
+  })
+
+  it('come back without traces where there are none', () => {
+    const { normaliseByAmount: _, traceMaxima, ...data } = comparisonInput([onA('a1', [1000]), onB('b1', [1])])
+    expect(unpackComparisonData(packComparisonData(data))).toEqual({ ...data, traceMaxima })
+    expect(traceMaxima).toEqual([null, null])
   })
 })
