@@ -1,4 +1,4 @@
-import { and, desc, eq, isNull, or } from 'drizzle-orm'
+import { and, desc, eq, isNull, or, sql } from 'drizzle-orm'
 import type { ComparisonLine } from '../../../shared/types/comparison'
 import type { Database } from '../../db/open'
 import { comparisons, people } from '../../db/schema'
@@ -10,7 +10,7 @@ export function listComparisons(db: Database, studyId: string, person: Person): 
   const rows = db.select({ comparison: comparisons, createdByName: people.name }).from(comparisons)
     .innerJoin(people, eq(people.id, comparisons.createdBy))
     .where(and(eq(comparisons.studyId, studyId), isNull(comparisons.archivedAt), or(eq(comparisons.practice, false), eq(comparisons.createdBy, person.id))))
-    .orderBy(desc(comparisons.createdAt), desc(comparisons.id)).all()
+    .orderBy(desc(comparisons.createdAt), desc(sql`${comparisons}.rowid`)).all()
   const lines = versionLines(db, rows.map(({ comparison }) => comparison.id))
   return rows.flatMap(({ comparison, createdByName }) => {
     const versions = lines.get(comparison.id) ?? []

@@ -1,4 +1,4 @@
-import { and, asc, count, desc, eq, ne } from 'drizzle-orm'
+import { and, asc, count, desc, eq, ne, sql } from 'drizzle-orm'
 import { alias } from 'drizzle-orm/sqlite-core'
 import { GAP_FILLED_SHARE } from '../../../shared/schemas/table'
 import type { StudyTables, TableLine, UploadDetail } from '../../../shared/types/table'
@@ -20,7 +20,7 @@ export function listTables(db: Database, studyId: string): StudyTables {
     .innerJoin(people, eq(people.id, tables.createdBy))
     .leftJoin(samples, eq(samples.id, tables.sampleId))
     .leftJoin(successor, eq(successor.id, tables.replacedBy))
-    .where(eq(tables.studyId, studyId)).orderBy(asc(samples.position), asc(tables.createdAt), asc(tables.fileName)).all()
+    .where(eq(tables.studyId, studyId)).orderBy(asc(samples.position), asc(tables.createdAt), asc(sql`${tables}.rowid`)).all()
   const used = new Map(db.select({ tableId: alignmentTables.tableId, alignments: count() }).from(alignmentTables).innerJoin(tables, eq(tables.id, alignmentTables.tableId))
     .where(eq(tables.studyId, studyId)).groupBy(alignmentTables.tableId).all().map(row => [row.tableId, row.alignments]))
   const lines = rows.map(({ layout, emptyShare, ...row }): TableLine => ({
@@ -28,7 +28,7 @@ export function listTables(db: Database, studyId: string): StudyTables {
     createdAt: row.createdAt.toISOString(), replacedAt: row.replacedAt?.toISOString() ?? null,
   }))
   const open = db.select({ upload: uploads, job: { progress: jobs.progress, message: jobs.message } }).from(uploads).leftJoin(jobs, eq(jobs.id, uploads.jobId))
-    .where(and(eq(uploads.studyId, studyId), eq(uploads.kind, 'table'), ne(uploads.status, 'read'))).orderBy(desc(uploads.createdAt)).all()
+    .where(and(eq(uploads.studyId, studyId), eq(uploads.kind, 'table'), ne(uploads.status, 'read'))).orderBy(desc(uploads.createdAt), desc(sql`${uploads}.rowid`)).all()
   return { tables: lines, uploads: open.map(row => uploadLine(row.upload, row.job)), samples: db.select({ id: samples.id, name: samples.name }).from(samples).where(eq(samples.studyId, studyId)).orderBy(asc(samples.position)).all() }
 }
 

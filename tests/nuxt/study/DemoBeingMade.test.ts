@@ -14,6 +14,6 @@ it('says what is being made, tells when more stands, and falls silent at the end
   expect(notice.emitted('more')).toBeUndefined()
   state.making = false
   await vi.advanceTimersByTimeAsync(1500)
-  await vi.waitFor(() => expect(notice.emitted('more')).toHaveLength(1))
+  await vi.waitFor(() => expect(notice.emitted('more')).toHaveLength(1), 30_000)
   expect(notice.text()).toBe('')
 })

@@ -15,6 +15,8 @@ if (workerData.act === 'throw') throw new Error('a fault of ours')
 if (workerData.act === 'hang') setInterval(() => {}, 1000)
 if (workerData.act === 'hoard') { const all = []; for (;;) all.push(new Array(1e5).fill(Math.random())) }
 `
+/** A busy machine may take long to start a worker. */
+const PATIENCE_MS = 30_000
 interface Input { act: 'double' | 'refuse' | 'throw' | 'hang' | 'hoard' | 'silent', value?: number }
 
 let open: TestLaboratory
@@ -99,7 +101,7 @@ describe('jobs', () => {
   it('are cancelled while they run and while they wait', async () => {
     const running = add({ act: 'hang' })
     const waiting = add({ act: 'double', value: 1 })
-    await vi.waitFor(() => expect(read(running.id)?.status).toBe('running'))
+    await vi.waitFor(() => expect(read(running.id)?.status).toBe('running'), PATIENCE_MS)
     runner.cancel(waiting.id)
     runner.cancel(running.id)
     await runner.idle()
@@ -123,7 +125,7 @@ describe('jobs', () => {
     expect(read(endless.id)).toMatchObject({ status: 'failed', message: expect.stringContaining('so that others get their turn') as unknown })
     expect(abandoned).toHaveLength(1)
     const next = add({ act: 'double', value: 4 })
-    await vi.waitFor(() => expect(read(next.id)?.attempts).toBe(1), 5000)
+    await vi.waitFor(() => expect(read(next.id)?.attempts).toBe(1), PATIENCE_MS)
   })
 
   it('may wait three a person, no more', () => {

@@ -81,7 +81,7 @@ describe('a clear file', () => {
     const open = () => readdirSync('/proc/self/fd').map(pathOf).filter(path => path.startsWith(join(laboratory.folder, 'originals')))
     expect(open()).toHaveLength(1)
     stream.destroy()
-    await vi.waitFor(() => expect(open()).toEqual([]))
+    await vi.waitFor(() => expect(open()).toEqual([]), 30_000)
   })
 
   it('gives its original back byte for byte', async () => {
