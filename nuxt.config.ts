@@ -71,7 +71,8 @@ export default defineNuxtConfig({
   },
   routeRules: {
     '/**': { headers: { 'cache-control': 'no-store' } },
-    '/_nuxt/**': { headers: { 'cache-control': 'public, max-age=31536000, immutable' } },
+    // A worker's script carries a policy of its own: it must ask for isolation as the page does, and may load nothing.
+    '/_nuxt/**': { headers: { 'cache-control': 'public, max-age=31536000, immutable', 'cross-origin-embedder-policy': 'require-corp', 'content-security-policy': 'default-src \'none\'' } },
     // Counted and refused with a sentence by receiveFile (tableLimit, traceLimit).
     '/api/studies/*/uploads': { security: { requestSizeLimiter: { maxRequestSizeInBytes: 2 ** 40 } } },
     '/api/studies/*/traces/uploads': { security: { requestSizeLimiter: { maxRequestSizeInBytes: 2 ** 40 } } },

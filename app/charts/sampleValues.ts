@@ -29,7 +29,8 @@ export const groupLabels = (names: { a: string, b: string }): Record<SampleGroup
   A: names.a, B: names.b, blank: 'blanks', pooledQc: 'pooled QCs', standard: 'standards', notCompared: 'not compared',
 })
 
-function groupOf({ kind, side }: Pick<ComparedSample, 'kind' | 'side'>, isCompared: boolean): SampleGroup {
+/** The group a sample is drawn in; a sample of a side that is not compared stands apart. */
+export function groupOf({ kind, side }: Pick<ComparedSample, 'kind' | 'side'>, isCompared: boolean): SampleGroup {
   if (kind === 'sample') return isCompared && side ? side : 'notCompared'
   return kind === 'pooledQc' || kind === 'standard' ? kind : 'blank'
 }

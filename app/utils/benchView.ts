@@ -1,5 +1,8 @@
 import { flagKinds, type FlagKind } from '#shared/schemas/flag'
 import { COUNTED_VERDICTS, type Verdict } from '#shared/science/verdict/verdicts'
+import { readGroups, readPair, readPresent, readScaling, writeGroups, writePair, writePresent, type ComponentPair, type FurtherGroup } from '~/utils/componentsView'
+import type { FeaturesPresent } from '#shared/science/components/chooseFeatures'
+import type { ComponentScaling } from '#shared/science/components/scaleFeatures'
 import { readArea, writeArea, type PlotArea } from '~/utils/plotArea'
 import { readWindow, writeWindow, type PlotWindow } from '~/utils/plotWindow'
 import type { Signal } from '~/charts/sideMeans'
@@ -71,6 +74,11 @@ export const viewFields = {
   foldWindow: field<PlotWindow | null>({ initial: null, key: 'window', isStep: false, read: readWindow, write: writeWindow }),
   /** Every plot shows the surroundings of the selected feature, and follows it. */
   closeUp: field<boolean>({ initial: false, key: 'close', isStep: false, read: text => text === 'yes' ? true : undefined, write: value => value ? 'yes' : '' }),
+  /** Principal components: the two that are drawn, the scaling, the features and the samples that take part beside the sides. */
+  componentPair: field<ComponentPair>({ initial: { across: 1, upwards: 2 }, key: 'pc', isStep: true, read: readPair, write: writePair }),
+  componentScaling: field<ComponentScaling>({ initial: 'none', key: 'scale', isStep: true, read: readScaling, write: value => value }),
+  componentFeatures: field<FeaturesPresent>({ initial: 'oneSide', key: 'in', isStep: true, read: readPresent, write: writePresent }),
+  componentGroups: field<FurtherGroup[]>({ initial: ['pooledQc'], key: 'with', isStep: true, read: readGroups, write: writeGroups }),
 }
 
 type Fields = typeof viewFields

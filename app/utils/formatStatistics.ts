@@ -22,3 +22,10 @@ export function formatFold(log2Ratio: number, names: { a: string, b: string }): 
   const times = formatTimes(2 ** Math.abs(log2Ratio))
   return times === '×1' ? 'equal' : `${times} in ${log2Ratio < 0 ? names.a : names.b}`
 }
+
+/** A score or loading with its sign and three significant digits: −12.4, +0.0312. */
+export function formatScore(value: number | undefined): string {
+  if (value === undefined || !Number.isFinite(value)) return NO_NUMBER
+  const digits = threeDigits(Math.abs(value))
+  return Number(digits) === 0 ? '0' : `${value < 0 ? '−' : '+'}${digits}`
+}

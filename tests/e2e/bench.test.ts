@@ -113,6 +113,21 @@ describe('the bench with 50,000 features', () => {
     expect(await page.getByRole('button', { name: 'Save as a new version' }).count()).toBe(0)
   }, { signInName: 'student' }))
 
+  it('computes principal components beside the page; what is chosen stands in the address', () => onBench('?plot=components&pc=2.1&with=blank', async (page) => {
+    const part = page.getByRole('region', { name: 'Principal components' })
+    await part.getByText(/^Variance: PC1 /).waitFor({ timeout: 60_000 })
+    expect(await part.getByText(/in 8 samples/).count()).toBe(1)
+    expect(await part.getByText(/^Across PC2 /).count()).toBe(1)
+    expect(await axeFindings(page)).toEqual([])
+    await part.getByLabel('blanks').uncheck()
+    await part.getByText(/in 6 samples/).waitFor({ timeout: 60_000 })
+    await expect.poll(() => queryOf(page), { timeout: 30_000 }).toMatchObject({ pc: '2.1', with: 'sides' })
+    await part.getByRole('button', { name: 'Show as table' }).last().click()
+    await part.getByRole('button', { name: /^m\/z/ }).first().click()
+    await expect.poll(() => queryOf(page), { timeout: 30_000 }).toHaveProperty('feature')
+    await page.getByRole('complementary', { name: 'Feature card' }).getByText('Values per sample').waitFor()
+  }))
+
   it.each([[1440, 'light'], [1440, 'dark'], [390, 'light'], [390, 'dark'], [320, 'light']] as const)('has no axe finding at %i px, %s', (width, scheme) => onBench('?feature=12', async (page) => {
     await page.getByText('Limits and settings').click()
     await page.getByText('Values per sample').waitFor()

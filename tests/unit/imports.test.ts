@@ -18,6 +18,7 @@ const allowed: Record<string, string[]> = {
   'server/jobs': ['server/jobs', 'server/domain', 'server/db', 'shared'],
   'server/api': ['server/domain', 'server/utils', 'server/db/packed.ts', 'shared'],
   'app/charts': ['app/charts', 'app/utils', 'shared'],
+  'app/workers': ['app/utils', 'shared'],
   'app/utils': ['app/utils', 'shared'],
   'app/stores': ['app/stores', 'app/utils', 'shared'],
   'app/composables': ['app/composables', 'app/stores', 'app/charts', 'app/utils', 'shared'],

@@ -7,6 +7,9 @@ export interface FilledValues {
   /** Values that were filled in, and the features they belong to. */
   filledValues: number
   filledFeatures: number
+  /** Of those values, how many in each sample, and in each feature that is left. */
+  filledOfSample: Int32Array
+  filledOfFeature: Int32Array
   /** Features left out: found in none of the samples; the same in all of them, so that they say nothing. */
   notFound: number
   withoutSpread: number
@@ -45,6 +48,7 @@ export function fillMissing(intensity: readonly Float64Array[], factors: ArrayLi
   })
   const kept = new Int32Array(count)
   const result = { filledValues: 0, filledFeatures: 0, notFound: 0, withoutSpread: 0 }
+  const filledOfSample = new Int32Array(intensity.length)
   let left = 0
   for (let j = 0; j < count; j++) {
     if (missing[j] === intensity.length) result.notFound++
@@ -59,8 +63,11 @@ export function fillMissing(intensity: readonly Float64Array[], factors: ArrayLi
   rows.forEach((row, s) => {
     for (let k = 0, at = s * left; k < left; k++, at++) {
       const value = row[kept[k]!]!
-      values[at] = Number.isFinite(value) ? value : lowest[kept[k]!]! - 1
+      const isMissing = !Number.isFinite(value)
+      if (isMissing) filledOfSample[s]!++
+      values[at] = isMissing ? lowest[kept[k]!]! - 1 : value
     }
   })
-  return { ...result, features: Int32Array.from({ length: left }, (_, k) => features[kept[k]!]!), values }
+  const ofKept = (list: Int32Array) => Int32Array.from({ length: left }, (_, k) => list[kept[k]!]!)
+  return { ...result, features: ofKept(features), values, filledOfSample, filledOfFeature: ofKept(missing) }
 }

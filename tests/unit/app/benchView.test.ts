@@ -1,9 +1,11 @@
 import fc from 'fast-check'
 import { describe, expect, it } from 'vitest'
 import { ABUNDANCE_LAYOUTS, initialView, isFilteredView, PLOTS, queryToView, SIGNALS, stepsOf, viewFields, viewToQuery, withoutFilter, type BenchView } from '../../../app/utils/benchView'
+import { FURTHER_GROUPS } from '../../../app/utils/componentsView'
 import { AREA_PANES, MOST_CORNERS } from '../../../app/utils/plotArea'
 import { MOST_SORTS, SORT_KEYS } from '../../../app/utils/featureOrder'
 import { OPEN_RANGE } from '../../../app/utils/numberRange'
+import { COMPONENT_SCALINGS } from '../../../shared/science/components/scaleFeatures'
 import { flagKinds } from '../../../shared/schemas/flag'
 import { COUNTED_VERDICTS } from '../../../shared/science/verdict/verdicts'
 
@@ -31,6 +33,10 @@ const view: fc.Arbitrary<BenchView> = fc.record({
   area: fc.option(fc.record({ pane: fc.constantFrom(...AREA_PANES), corners: fc.array(fc.tuple(decimals(4, 2000), decimals(4, 2000)), { minLength: 3, maxLength: MOST_CORNERS }) }), { nil: null }),
   foldWindow: fc.option(fc.record({ x: ends, y: ends }), { nil: null }),
   closeUp: fc.boolean(),
+  componentPair: fc.constantFrom({ across: 1, upwards: 2 }, { across: 3, upwards: 1 }, { across: 4, upwards: 5 }),
+  componentScaling: fc.constantFrom(...COMPONENT_SCALINGS),
+  componentFeatures: fc.constantFrom('oneSide', 'bothSides'),
+  componentGroups: fc.subarray([...FURTHER_GROUPS]),
 })
 
 describe('the address of the bench', () => {

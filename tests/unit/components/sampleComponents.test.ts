@@ -18,6 +18,8 @@ describe('filling what is missing', () => {
     expect([...filled.features]).toEqual([0, 1, 4])
     const expected = [3, 3, Math.log2(5), 2, 4, Math.log2(5) - 1, 1, 6, Math.log2(7)]
     expect([...filled.values]).toEqual(expected)
+    expect([...filled.filledOfSample]).toEqual([1, 1, 1])
+    expect([...filled.filledOfFeature]).toEqual([1, 1, 1])
     expect(intensity[0]?.[1]).toBeNaN()
   })
 
