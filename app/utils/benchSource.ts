@@ -1,4 +1,5 @@
 import type { ComparisonData } from '#shared/formats/comparisonData'
+import type { ExtractedTrace, SampleTrace } from '#shared/formats/traceColumns'
 import type { VerdictResult } from '#shared/science/verdict/verdictResult'
 import type { ComparisonDetail } from '#shared/types/comparison'
 
@@ -14,6 +15,10 @@ export interface BenchSource {
   loadVerdicts: () => Promise<VerdictResult>
   /** The intensities, for values per sample and previews; null where they are not to be had. */
   loadData: (() => Promise<ComparisonData>) | null
+  /** Total and base peak of each sample that has raw data, which may be none; null where they are not to be had. */
+  loadTraces: (() => Promise<SampleTrace[]>) | null
+  /** The traces of these features' m/z in each sample that has raw data; null where they are not to be had. */
+  loadExtracted: ((features: readonly number[]) => Promise<ExtractedTrace[]>) | null
 }
 
 /** What the person may do here. */

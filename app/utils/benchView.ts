@@ -10,6 +10,7 @@ import { MOST_SORTS, SORT_KEYS, type FeatureSort } from '~/utils/featureOrder'
 import { readFormula, readMass, writeFormula, writeMass, type FormulaTarget, type MassTarget } from '~/utils/massTarget'
 import { OPEN_RANGE, readRange, writeRange, type NumberRange } from '~/utils/numberRange'
 import { RANGE_FILTERS, RANGE_NAMES, type RangeName } from '~/utils/rangeFilters'
+import { readTimeWindow, TRACE_KINDS, TRACE_ORIGINS, TRACE_SCALES, writeTimeWindow, type TimeWindow, type TraceKind, type TraceOrigin, type TraceScale } from '~/utils/traceView'
 
 /** One part of what the bench shows, and how the address holds it: undefined where it stands as by default. */
 export interface ViewField<Value> {
@@ -79,6 +80,11 @@ export const viewFields = {
   componentScaling: field<ComponentScaling>({ initial: 'none', key: 'scale', isStep: true, read: readScaling, write: value => value }),
   componentFeatures: field<FeaturesPresent>({ initial: 'oneSide', key: 'in', isStep: true, read: readPresent, write: writePresent }),
   componentGroups: field<FurtherGroup[]>({ initial: ['pooledQc'], key: 'with', isStep: true, read: readGroups, write: writeGroups }),
+  traceKind: field<TraceKind>({ initial: 'base', key: 'trace', isStep: true, read: text => TRACE_KINDS.find(name => name === text), write: value => value }),
+  traceScale: field<TraceScale>({ initial: 'normalised', key: 'tscale', isStep: true, read: text => TRACE_SCALES.find(name => name === text), write: value => value }),
+  traceOrigin: field<TraceOrigin>({ initial: 'measured', key: 'tfrom', isStep: true, read: text => TRACE_ORIGINS.find(name => name === text), write: value => value }),
+  /** The part of the run that the chromatogram shows; null: all of it. */
+  traceWindow: field<TimeWindow | null>({ initial: null, key: 'tmin', isStep: false, read: readTimeWindow, write: writeTimeWindow }),
 }
 
 type Fields = typeof viewFields

@@ -6,6 +6,7 @@ import { AREA_PANES, MOST_CORNERS } from '../../../app/utils/plotArea'
 import { MOST_SORTS, SORT_KEYS } from '../../../app/utils/featureOrder'
 import { OPEN_RANGE } from '../../../app/utils/numberRange'
 import { COMPONENT_SCALINGS } from '../../../shared/science/components/scaleFeatures'
+import { TRACE_KINDS, TRACE_ORIGINS, TRACE_SCALES, type TimeWindow } from '../../../app/utils/traceView'
 import { flagKinds } from '../../../shared/schemas/flag'
 import { COUNTED_VERDICTS } from '../../../shared/science/verdict/verdicts'
 
@@ -37,6 +38,10 @@ const view: fc.Arbitrary<BenchView> = fc.record({
   componentScaling: fc.constantFrom(...COMPONENT_SCALINGS),
   componentFeatures: fc.constantFrom('oneSide', 'bothSides'),
   componentGroups: fc.subarray([...FURTHER_GROUPS]),
+  traceKind: fc.constantFrom(...TRACE_KINDS),
+  traceScale: fc.constantFrom(...TRACE_SCALES),
+  traceOrigin: fc.constantFrom(...TRACE_ORIGINS),
+  traceWindow: fc.option(fc.tuple(fc.integer({ min: 0, max: 400_000 }), fc.integer({ min: 1, max: 90_000 })).map(([from, by]): TimeWindow => [from / 1000, (from + by) / 1000]), { nil: null }),
 })
 
 describe('the address of the bench', () => {
