@@ -1,4 +1,3 @@
-import { MAX_TABLE_BYTES } from '#shared/schemas/table'
 import type { UploadAnswer } from '#shared/types/table'
 import { sizeOf } from '~/utils/sizeOf'
 
@@ -12,21 +11,31 @@ export interface Sending {
   sentence: string
 }
 
+/** Where files go, and what one may be. */
+export interface SendingPlace {
+  address: string
+  mostBytes: number
+  /** What one of them is: "a feature table". */
+  what: string
+  /** More for the query of each, asked when it is added. */
+  query?: () => Record<string, string>
+}
+
 const AT_ONCE = 2
 
 /** Sends files one request each, two at a time, with progress; what arrives whole leaves the list and goes on in the list of uploads. */
-export function useFileSending(studyId: string, onArrival: () => void) {
+export function useFileSending({ address, mostBytes, what, query }: SendingPlace, onArrival: () => void) {
   const sendings = ref<Sending[]>([])
-  const files = new Map<number, { file: File, replaces?: string }>()
+  const files = new Map<number, { file: File, query: Record<string, string> }>()
   const requests = new Map<number, XMLHttpRequest>()
   let nextKey = 0
 
   function add(chosen: Iterable<File>, replaces?: string) {
     for (const file of chosen) {
       const key = nextKey++
-      const tooLarge = file.size > MAX_TABLE_BYTES
-      const sentence = tooLarge ? `Not sent: it has ${sizeOf(file.size)}, and a feature table may have at most ${sizeOf(MAX_TABLE_BYTES)}.` : file.size === 0 ? 'Not sent: the file is empty.' : 'Waits for its turn.'
-      if (!tooLarge && file.size > 0) files.set(key, { file, replaces })
+      const tooLarge = file.size > mostBytes
+      const sentence = tooLarge ? `Not sent: it has ${sizeOf(file.size)}, and ${what} may have at most ${sizeOf(mostBytes)}.` : file.size === 0 ? 'Not sent: the file is empty.' : 'Waits for its turn.'
+      if (!tooLarge && file.size > 0) files.set(key, { file, query: { ...query?.(), ...(replaces ? { replaces } : {}) } })
       sendings.value.push({ key, name: file.name, bytes: file.size, sent: 0, state: files.has(key) ? 'waiting' : 'failed', sentence })
     }
     next()
@@ -46,8 +55,7 @@ export function useFileSending(studyId: string, onArrival: () => void) {
     request.upload.onprogress = event => sending.sent = event.loaded
     request.onload = () => request.status === 202 ? arrived(sending, JSON.parse(request.responseText) as UploadAnswer) : failed(sending, sentenceIn(request.responseText))
     request.onerror = () => failed(sending, 'The connection was lost. Nothing of the file was kept.')
-    const query = new URLSearchParams({ name: entry.file.name, ...(entry.replaces ? { replaces: entry.replaces } : {}) })
-    request.open('POST', `/api/studies/${studyId}/uploads?${query}`)
+    request.open('POST', `${address}?${new URLSearchParams({ name: entry.file.name, ...entry.query })}`)
     request.setRequestHeader('content-type', 'application/octet-stream')
     request.send(entry.file)
   }

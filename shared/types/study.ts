@@ -2,7 +2,7 @@ import type { Role } from '../permissions/roles'
 import type { MethodInput } from '../schemas/method'
 
 /** What stands in a study, as the person who asks may see it: practice work of others is not counted. */
-export interface StudyCounts { samples: number, tables: number, alignments: number, comparisons: number }
+export interface StudyCounts { samples: number, tables: number, traces: number, alignments: number, comparisons: number }
 
 /** A line of the study list. Moments are ISO 8601, UTC. */
 export interface StudyListItem {

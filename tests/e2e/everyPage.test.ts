@@ -31,6 +31,7 @@ const pages: Record<string, { as: 'analyst' | 'scientist' | 'reviewer' | 'studen
   'studies/[studyId]/edit': { as: 'analyst' },
   'studies/[studyId]/samples': { as: 'analyst' },
   'studies/[studyId]/tables': { as: 'analyst' },
+  'studies/[studyId]/traces': { as: 'analyst' },
   'studies/[studyId]/flags': { as: 'scientist' },
   'studies/[studyId]/share-links': { as: 'reviewer' },
   'studies/[studyId]/alignments/index': { as: 'analyst' },

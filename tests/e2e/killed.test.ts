@@ -4,9 +4,11 @@ import { tmpdir } from 'node:os'
 import { join } from 'node:path'
 import { afterEach, beforeEach, describe, expect, it, vi } from 'vitest'
 import { openDatabase } from '../../server/db/open'
-import { alignments, alignmentTables, jobs, originals, people, samples, tables, uploads } from '../../server/db/schema'
+import { alignments, alignmentTables, jobs, originals, people, samples, tables, traces, uploads } from '../../server/db/schema'
 import { Jobs } from '../../server/jobs/runner'
 import { startBuiltServer, type BuiltServer } from '../support/builtServer'
+import { mzmlText, writtenScan } from '../support/mzmlText'
+import { seededRandom } from '../support/seededRandom'
 import { addTestPerson, addTestStudy, migrations, type TestLaboratory } from '../support/laboratory'
 import { secondConnection } from '../support/secondConnection'
 import { signInCookie, testPasswordHash } from '../support/signIn'
@@ -89,6 +91,19 @@ describe('kill -9', () => {
     expect(read).toEqual([{ fileName: 'big.csv', features: 200_000 }])
     expect(look.db.select().from(originals).all().filter(original => original.bytes === Buffer.byteLength(csv))).toHaveLength(1)
     expect(readdirSync(join(folder, 'originals'), { recursive: true }).filter(name => String(name).endsWith('.gz'))).toHaveLength(1)
+  })
+
+  it('while raw data are read: they are read again, once, and nothing is left half kept', async () => {
+    const random = seededRandom(4)
+    const run = mzmlText(Array.from({ length: 300 }, (_, scan) => writtenScan({ minutes: scan / 50, mz: Array.from({ length: 2000 }, () => 100 + 900 * random.uniform()), intensity: Array.from({ length: 2000 }, () => 1 + 1000 * random.uniform()) })))
+    const { url } = await restart()
+    await post(url, await signInCookie(url, signInName), `/api/studies/${studyId}/traces/uploads?name=run.mzML`, run, 'application/octet-stream')
+    await restart()
+    await settled()
+    const kept = look.db.select({ id: traces.id, fileName: traces.fileName, scans: traces.scans, centroids: traces.centroids }).from(traces).all()
+    expect(kept).toEqual([{ id: expect.any(String), fileName: 'run.mzML', scans: 300, centroids: 600_000 }])
+    expect(readdirSync(join(folder, 'traces'))).toEqual(kept.map(trace => trace.id))
+    expect(readdirSync(join(folder, 'received'))).toEqual([])
   })
 
   it('during an alignment: it runs again, and one whole alignment stands', async () => {

@@ -1,61 +1,24 @@
-import { mkdtempSync, readdirSync, readFileSync, rmSync } from 'node:fs'
+import { readdirSync, readFileSync } from 'node:fs'
 import { request as httpRequest } from 'node:http'
-import { tmpdir } from 'node:os'
 import { join } from 'node:path'
 import { fileURLToPath } from 'node:url'
-import type { Browser } from 'playwright-core'
 import { afterAll, afterEach, beforeAll, describe, expect, it } from 'vitest'
-import { openDatabase } from '../../server/db/open'
-import { people, samples } from '../../server/db/schema'
 import { MAX_TABLE_BYTES } from '../../shared/schemas/table'
 import type { StudyTables } from '../../shared/types/table'
 import { axeFindings } from '../support/axe'
-import { launchBrowser } from '../support/browser'
-import { startBuiltServer, type BuiltServer } from '../support/builtServer'
-import { addTestPerson, addTestStudy, migrations } from '../support/laboratory'
-import { signInCookie, TEST_PASSWORD, testPasswordHash } from '../support/signIn'
-import { watchedPage, type WatchedPage, type WatchedPageOptions } from '../support/watchedPage'
+import { openUploadPages, type UploadPages } from '../support/uploadPages'
+import type { WatchedPage, WatchedPageOptions } from '../support/watchedPage'
 
-const folder = mkdtempSync(join(tmpdir(), 'steelyard-tables-'))
 const reference = (name: string) => fileURLToPath(new URL(`../reference/data/tables/${name}`, import.meta.url))
-let server: BuiltServer
-let browser: Browser
-let signInName: string
-let studyIds: string[]
-const open: WatchedPage[] = []
+let pages: UploadPages
 
 beforeAll(async () => {
-  const database = await openDatabase(folder, 'lab', migrations)
-  const analyst = addTestPerson(database, 'analyst')
-  signInName = analyst.signInName
-  database.db.update(people).set({ passwordHash: await testPasswordHash() }).run()
-  studyIds = [1, 2].map(() => addTestStudy(database, analyst).id)
-  for (const studyId of studyIds) for (const [position, name] of ['Plain', 'Press A1', 'Press A2', 'Carton B1', 'Carton B2'].entries()) database.db.insert(samples).values({ studyId, name, position }).run()
-  database.close()
-  server = await startBuiltServer({ folder, env: { NUXT_SESSION_COOKIE_SECURE: 'false' } })
-  browser = await launchBrowser()
+  pages = await openUploadPages(['Plain', 'Press A1', 'Press A2', 'Carton B1', 'Carton B2'])
 })
-afterEach(async () => {
-  await Promise.all(open.splice(0).map(watched => watched.close()))
-})
-afterAll(async () => {
-  await browser?.close()
-  await server?.stop()
-  rmSync(folder, { recursive: true, force: true })
-})
+afterEach(() => pages.closePages())
+afterAll(() => pages?.close())
 
-async function atTables(studyId: string, options?: WatchedPageOptions): Promise<WatchedPage> {
-  const watched = await watchedPage(browser, options)
-  open.push(watched)
-  const { page } = watched
-  await page.goto(`${server.url}/sign-in`, { waitUntil: 'networkidle' })
-  await page.getByLabel('Sign-in name').fill(signInName)
-  await page.getByLabel('Password', { exact: true }).fill(TEST_PASSWORD)
-  await page.getByRole('button', { name: 'Sign in' }).click()
-  await page.waitForURL(`${server.url}/`)
-  await page.goto(`${server.url}/studies/${studyId}/tables`, { waitUntil: 'networkidle' })
-  return watched
-}
+const atTables = (studyId: string, options?: WatchedPageOptions) => pages.at(studyId, 'tables', options)
 
 /** With STEELYARD_SHOTS set to a folder, what the page looks like is kept there. */
 async function look({ page }: WatchedPage, name: string) {
@@ -65,7 +28,7 @@ async function look({ page }: WatchedPage, name: string) {
 
 describe('the page of tables', () => {
   it('takes many files at once, asks what is ambiguous, lists what was refused', async () => {
-    const watched = await atTables(studyIds[0] ?? '')
+    const watched = await atTables(pages.studyIds[0] ?? '')
     const { page } = watched
     await page.getByText('No feature tables yet').waitFor()
     expect(await axeFindings(page)).toEqual([])
@@ -98,7 +61,7 @@ describe('the page of tables', () => {
   })
 
   it('says that content is known, replaces a table and reads one differently, on a narrow dark screen', async () => {
-    const watched = await atTables(studyIds[1] ?? '', { width: 390, scheme: 'dark' })
+    const watched = await atTables(pages.studyIds[1] ?? '', { width: 390, scheme: 'dark' })
     const { page } = watched
     await page.getByRole('region', { name: 'Add feature tables' }).locator('input').setInputFiles(reference('area-and-height.csv'))
     await page.getByLabel('Sample of area-and-height.csv').waitFor()
@@ -131,14 +94,14 @@ describe('the page of tables', () => {
 })
 
 describe('an upload over HTTP', () => {
-  const headersOf = async () => ({ cookie: await signInCookie(server.url, signInName), origin: server.url, 'content-type': 'application/octet-stream' })
-  const path = (name: string) => `/api/studies/${studyIds[1]}/uploads?name=${encodeURIComponent(name)}`
-  const incoming = () => readdirSync(join(folder, 'incoming'))
+  const headersOf = async () => ({ ...await pages.headers(), 'content-type': 'application/octet-stream' })
+  const path = (name: string) => `/api/studies/${pages.studyIds[1]}/uploads?name=${encodeURIComponent(name)}`
+  const incoming = () => readdirSync(join(pages.folder, 'incoming'))
 
   it('is refused with a sentence where it is announced as too large, and the connection ends', async () => {
     const answer = await new Promise<{ status: number, connection: string | undefined, text: string }>((resolve, reject) => {
       void headersOf().then((headers) => {
-        const request = httpRequest(server.url + path('large.csv'), { method: 'POST', headers: { ...headers, 'content-length': MAX_TABLE_BYTES + 1 } }, (response) => {
+        const request = httpRequest(pages.server.url + path('large.csv'), { method: 'POST', headers: { ...headers, 'content-length': MAX_TABLE_BYTES + 1 } }, (response) => {
           let text = ''
           response.on('data', (chunk: Buffer) => text += chunk)
           response.on('end', () => resolve({ status: response.statusCode ?? 0, connection: response.headers.connection, text }))
@@ -153,23 +116,23 @@ describe('an upload over HTTP', () => {
   it('leaves nothing where it is cut off, and the server goes on', async () => {
     const headers = await headersOf()
     await new Promise<void>((resolve) => {
-      const request = httpRequest(server.url + path('cut.csv'), { method: 'POST', headers: { ...headers, 'content-length': 1000 } })
+      const request = httpRequest(pages.server.url + path('cut.csv'), { method: 'POST', headers: { ...headers, 'content-length': 1000 } })
       request.on('error', () => resolve())
       request.write('m/z,RT,Area\n', () => setTimeout(() => request.destroy(), 200))
     })
     await expect.poll(incoming).toEqual([])
-    const { uploads } = await (await fetch(`${server.url}/api/studies/${studyIds[1]}/tables`, { headers })).json() as StudyTables
+    const { uploads } = await (await fetch(`${pages.server.url}/api/studies/${pages.studyIds[1]}/tables`, { headers })).json() as StudyTables
     expect(uploads.filter(upload => upload.fileName === 'cut.csv')).toEqual([])
-    expect(server.output()).not.toContain('Uncaught')
+    expect(pages.server.output()).not.toContain('Uncaught')
   })
 
   it('keeps a name with any letters, and gives the original back under it, byte for byte', async () => {
     const headers = await headersOf()
     const content = readFileSync(reference('tabs-seconds.tsv'))
-    expect((await fetch(server.url + path('Äpfel “1”.tsv'), { method: 'POST', headers, body: Uint8Array.from(content) })).status).toBe(202)
-    const find = async () => (await (await fetch(`${server.url}/api/studies/${studyIds[1]}/tables`, { headers })).json() as StudyTables).tables.find(table => table.fileName === 'Äpfel “1”.tsv')
+    expect((await fetch(pages.server.url + path('Äpfel “1”.tsv'), { method: 'POST', headers, body: Uint8Array.from(content) })).status).toBe(202)
+    const find = async () => (await (await fetch(`${pages.server.url}/api/studies/${pages.studyIds[1]}/tables`, { headers })).json() as StudyTables).tables.find(table => table.fileName === 'Äpfel “1”.tsv')
     await expect.poll(find, { timeout: 20_000 }).toBeDefined()
-    const original = await fetch(`${server.url}/api/studies/${studyIds[1]}/tables/${(await find())?.id}/original`, { headers })
+    const original = await fetch(`${pages.server.url}/api/studies/${pages.studyIds[1]}/tables/${(await find())?.id}/original`, { headers })
     expect(original.headers.get('content-disposition')).toContain(`filename*=UTF-8''${encodeURIComponent('Äpfel “1”.tsv')}`)
     expect(Buffer.compare(Buffer.from(await original.arrayBuffer()), content)).toBe(0)
   })

@@ -35,7 +35,7 @@ describe('a new study', () => {
     expect(view).toMatchObject({ title: 'Two apple juices', sideAName: 'A', sideBName: 'B', restricted: false, createdByName: analyst.name })
     expect(view.members).toEqual([{ id: analyst.id, name: analyst.name, roles: ['analyst'], closed: false }])
     expect(view.method).toMatchObject({ name: 'C18, negative', polarity: 'negative', voidMinutes: null, divertWindows: [] })
-    expect(view.counts).toEqual({ samples: 0, tables: 0, alignments: 0, comparisons: 0 })
+    expect(view.counts).toEqual({ samples: 0, tables: 0, traces: 0, alignments: 0, comparisons: 0 })
   })
 
   it('is refused with the same method name again, and leaves nothing behind', () => {
