@@ -34,7 +34,7 @@ describe('the page of traces', () => {
     expect(await page.getByLabel('Sample of carton_b1.mzML').locator('option:checked').textContent()).toBe('Carton B1')
     await page.getByText('the file ends early').waitFor()
     await page.getByText('MS-Numpress linear prediction compression').waitFor()
-    await page.getByText('The file holds profile data').first().waitFor()
+    await page.getByText('The file holds profile data').last().waitFor()
     await page.getByText('One trace has no sample yet.').waitFor()
     expect(await lookAt(page, 'traces-read')).toEqual([])
 
