@@ -1,14 +1,13 @@
 import type { ComparisonData } from '#shared/formats/comparisonData'
 import { withKnownFloor } from '#shared/formats/comparisonData'
 import type { ExtractedTrace, SampleTrace } from '#shared/formats/traceColumns'
+import { MOST_EXTRACTED } from '#shared/schemas/comparison'
 import { chooseSamples } from '#shared/science/verdict/chooseSamples'
 import type { ComparisonSettings } from '#shared/science/verdict/settings'
 import { drawnSamples, linesFromFeatures, type SampleLine } from '~/charts/chromatogramCurves'
 import type { BenchSource } from '~/utils/benchSource'
 import type { TraceOrigin } from '~/utils/traceView'
 
-/** So many features are extracted at once at most. */
-export const MOST_EXTRACTED = 12
 /** Extracted traces are kept of so many features. */
 const MOST_KEPT = 120
 /** Moving through the table does not ask for each feature on the way. */

@@ -54,6 +54,17 @@ export type NewVersionInput = z.infer<typeof newVersionSchema>
 
 export const versionQuerySchema = z.object({ version: z.coerce.number().int().min(1).optional() })
 
+/** So many features are extracted from raw data in one request. */
+export const MOST_EXTRACTED = 12
+
+const featurePlaces = z.string({ error: 'Name the features, as in “0.7.12”.' }).regex(/^\d{1,9}(?:\.\d{1,9})*$/, 'Name the features, as in “0.7.12”.')
+  .transform(text => text.split('.').map(Number)).refine(places => places.length <= MOST_EXTRACTED, `At most ${MOST_EXTRACTED} features at once.`)
+
+/** Places in the alignment, joined by points: whose traces to extract. */
+export const sharedExtractQuerySchema = z.object({ features: featurePlaces })
+export const extractQuerySchema = versionQuerySchema.extend({ features: featurePlaces })
+export type ExtractQuery = z.output<typeof extractQuerySchema>
+
 export const changesQuerySchema = z.object({
   version: z.coerce.number().int().min(1).optional(),
   /** The version to compare with, of this comparison or of `againstComparison`; else the one before. */

@@ -35,10 +35,11 @@ const file: RightsFile = {
     db.update(people).set({ closedAt: new Date() }).where(eq(people.id, maker.id)).run()
     for (const [name, secret] of Object.entries(made)) fixture[secretName(name as GuestLink)] = secret
   },
-  rows: ['', '/data', '/input', '/verdicts.csv'].map(part => ({
+  rows: ['', '/data', '/input', '/traces', '/extracted', '/verdicts.csv'].map(part => ({
     route: `GET /api/shared/[secret]${part}`,
     needs: 'public' as const,
     from: { secret: secretName('right') },
+    ...(part === '/extracted' ? { query: 'features=0.1' } : {}),
     guest: part === '/verdicts.csv' ? { withoutExport: 403 } : {},
   })),
 }

@@ -1,0 +1,10 @@
+import { extractQuerySchema } from '../../../../../../shared/schemas/comparison'
+import { comparisonExtracted } from '../../../../../domain/comparison/comparisonTraces'
+
+export default defineRoute(async (event) => {
+  const { person, study } = await requireStudy(event)
+  const query = readQueryInput(event, extractQuerySchema)
+  const packed = await comparisonExtracted(useLaboratory(), study.id, readParam(event, 'comparisonId'), person, query)
+  setResponseHeader(event, 'content-type', 'application/octet-stream')
+  return packed
+})
