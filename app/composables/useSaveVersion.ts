@@ -3,7 +3,7 @@ import type { NewVersionInput } from '#shared/schemas/comparison'
 /** Saves a new version of a comparison: a job on the server, followed until it ends. `onSaved` is called when it stands. */
 export function useSaveVersion(address: string, onSaved: () => Promise<unknown>) {
   const failed = ref('')
-  const { open, follow } = useJob((job) => {
+  const { job, open, follow } = useJob((job) => {
     if (job.status === 'done') void onSaved()
     else failed.value = job.message || 'The version could not be made.'
   })
@@ -13,6 +13,8 @@ export function useSaveVersion(address: string, onSaved: () => Promise<unknown>)
     follow(jobId)
   })
   return {
+    /** How far it is, while it is being saved. */
+    progress: computed(() => open.value ? job.value : null),
     saving: computed(() => asking.busy.value || open.value),
     problem: computed(() => failed.value || asking.problem.value?.message || ''),
     save: asking.submit,

@@ -49,6 +49,8 @@ export const newVersionSchema = z.object({
   alignmentId: idField.optional(),
   /** Take amounts and all else from the sample sheet as it is now; else as they were in `from`. */
   useSheet: z.boolean().default(false),
+  /** Look into the traces that stand now, or into none; else as the version it starts from. */
+  useTraces: z.boolean().optional(),
 })
 export type NewVersionInput = z.infer<typeof newVersionSchema>
 

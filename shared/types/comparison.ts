@@ -2,6 +2,7 @@ import type { Polarity } from '../schemas/method'
 import type { MassKind } from '../science/table/layout'
 import type { ComparedSample, ComparisonSettings } from '../science/verdict/settings'
 import type { Verdict } from '../science/verdict/verdicts'
+import type { UsedTrace } from './trace'
 
 export interface VersionLine {
   number: number
@@ -47,6 +48,10 @@ export interface ComparisonDetail {
     tables: { sampleName: string, fileName: string, digest: string }[]
     /** What the sample sheet says otherwise now, as sentences; empty where nothing changed. */
     sheetChanges: string[]
+    /** The traces that were looked into. */
+    traces: UsedTrace[]
+    /** Traces that came in, were replaced or taken off since, as sentences. */
+    traceChanges: string[]
   }
   /** May the asking person save a new version? */
   mayChange: boolean

@@ -1,23 +1,23 @@
-import type { AlignedScans, Centroids } from '../../shared/science/traces/highestSignals'
+import { sliceOf, slicesBetween, type Centroids } from '../../shared/science/traces/centroids'
+import type { AlignedScans } from '../../shared/science/traces/highestSignals'
 import { ascendingOrder } from '../../shared/science/numeric/ascendingOrder'
 import { seededRandom } from './seededRandom'
 
-const SLICE_MZ = 10
-
-/** Cuts centroids into slices of 10 m/z and reads them as a trace's files are read; counts what was asked for. */
-export function slicedTrace(all: Centroids, rest: Omit<AlignedScans, 'centroidsBetween' | 'lowestMz' | 'highestMz'> & Partial<AlignedScans>): AlignedScans {
+/** Cuts centroids into slices of 10 m/z and reads them as a trace's files are read. */
+export function slicedTrace(all: Centroids, rest: Omit<AlignedScans, 'centroidsBetween' | 'lowestMz' | 'highestMz' | 'intensityLimit'> & Partial<AlignedScans>): AlignedScans {
   const slices = new Map<number, Centroids>()
   for (let start = 0; start < all.mz.length;) {
-    const slice = Math.floor(all.mz[start]! / SLICE_MZ)
+    const slice = sliceOf(all.mz[start]!)
     let end = start
-    while (end < all.mz.length && Math.floor(all.mz[end]! / SLICE_MZ) === slice) end++
+    while (end < all.mz.length && sliceOf(all.mz[end]!) === slice) end++
     slices.set(slice, { mz: all.mz.subarray(start, end), intensity: all.intensity.subarray(start, end), scan: all.scan.subarray(start, end) })
     start = end
   }
   return {
     lowestMz: all.mz[0] ?? Number.NaN,
     highestMz: all.mz.at(-1) ?? Number.NaN,
-    centroidsBetween: (low, high) => Array.from({ length: Math.floor(high / SLICE_MZ) - Math.floor(low / SLICE_MZ) + 1 }, (_, i) => slices.get(Math.floor(low / SLICE_MZ) + i) ?? []).flat(),
+    intensityLimit: 0,
+    centroidsBetween: (low, high) => slicesBetween(low, high).flatMap(slice => slices.get(slice) ?? []),
     ...rest,
   }
 }

@@ -41,7 +41,7 @@ export const traces = sqliteTable('traces', {
 export const traceMaxima = sqliteTable('trace_maxima', {
   alignmentId: text().notNull().references(() => alignments.id, { onDelete: 'cascade' }),
   traceId: text().notNull().references(() => traces.id, { onDelete: 'cascade' }),
-  /** Packed Float64 an aligned feature: counts; 0 where nothing was there, NaN where the trace does not cover its m/z or time. */
+  /** Packed Float64 an aligned feature: counts; 0 where nothing was there, NaN where the trace does not say. */
   maxima: blob({ mode: 'buffer' }).notNull(),
   createdAt: createdAt(),
 }, table => [primaryKey({ columns: [table.alignmentId, table.traceId] })])

@@ -1,4 +1,5 @@
 import type { ComparisonSettings } from '../../../shared/science/verdict/settings'
+import type { UsedTrace } from '../../../shared/types/trace'
 import type { StoredSample } from './storedSample'
 
 /** What a comparing job is asked to do: all a version holds, but for its verdicts. */
@@ -12,4 +13,6 @@ export interface CompareInput {
   sideBName: string
   settings: ComparisonSettings
   samples: StoredSample[]
+  /** Raw data to look into; absent: none. */
+  traces?: UsedTrace[]
 }

@@ -8,6 +8,7 @@ import { record } from '../activity/record'
 import { notFound } from '../DomainError'
 import { touchStudy } from '../study/touchStudy'
 import type { CompareInput } from './compareInput'
+import { keepTraceMaxima, type TraceMaxima } from '../trace/traceMaxima'
 import { readSamples, storeSample } from './storedSample'
 import { versionDifferences } from './versionDifferences'
 
@@ -15,6 +16,8 @@ import { versionDifferences } from './versionDifferences'
 export interface ComparedResult extends Pick<VerdictResult, 'counts' | 'cautions'> {
   samples: ComparedSample[]
   columns: Uint8Array
+  /** What was found in traces that nobody had looked into on this alignment; absent: nothing new. */
+  maxima?: TraceMaxima[]
 }
 
 /** Writes a version, and its comparison where it is the first, in the transaction that ends the job. Gives the comparison's id. */
@@ -25,11 +28,12 @@ export function keepVersion(db: Database, studyId: string, input: CompareInput, 
     .where(eq(comparisonVersions.comparisonId, comparisonId)).orderBy(desc(comparisonVersions.number)).limit(1).get()
   const alignment = db.select({ number: alignments.number }).from(alignments).where(and(eq(alignments.id, input.alignmentId), eq(alignments.studyId, studyId))).get()
   if (!alignment) throw notFound()
-  const { alignmentId, sideAName, sideBName, settings } = input
-  const content = { alignmentId, alignmentNumber: alignment.number, sideAName, sideBName, settings, samples: result.samples, engineVersion: ENGINE_VERSION }
+  const { alignmentId, sideAName, sideBName, settings, traces = [] } = input
+  keepTraceMaxima(db, alignmentId, result.maxima ?? [])
+  const content = { alignmentId, alignmentNumber: alignment.number, sideAName, sideBName, settings, samples: result.samples, traces, engineVersion: ENGINE_VERSION }
   const number = (before?.comparison_versions.number ?? 0) + 1
   db.insert(comparisonVersions).values({
-    comparisonId, studyId, alignmentId, number, sideAName, sideBName, settings, engineVersion: ENGINE_VERSION,
+    comparisonId, studyId, alignmentId, number, sideAName, sideBName, settings, traces, engineVersion: ENGINE_VERSION,
     samples: result.samples.map(storeSample) as ComparedSample[],
     differs: before ? versionDifferences({ ...before.comparison_versions, samples: readSamples(before.comparison_versions.samples), alignmentNumber: before.alignments.number }, content) : [],
     cautions: result.cautions,

@@ -15,6 +15,7 @@ import type { CompareInput } from './compareInput'
 import { findComparison, findVersion } from './findComparison'
 import { snapshotSamples, withSides } from './snapshotSamples'
 import { readSamples, storeSample } from './storedSample'
+import { tracesFrom, tracesToUse } from './tracesToUse'
 import { versionDifferences } from './versionDifferences'
 
 /** Checks what a new comparison needs and gives the input of its job. A comparison on a practice alignment is a practice copy. */
@@ -30,7 +31,7 @@ export function prepareComparison(db: Database, study: VisibleStudy, input: NewC
   const sideBName = input.sideBName ?? study.sideBName
   return {
     comparisonId: null, title: input.title || `${sideAName} against ${sideBName}`, practice, alignmentId: alignment.id,
-    sideAName, sideBName, settings, samples: samples.map(storeSample),
+    sideAName, sideBName, settings, samples: samples.map(storeSample), traces: tracesToUse(db, alignment.id, samples),
   }
 }
 
@@ -51,14 +52,15 @@ export function prepareVersion(db: Database, study: VisibleStudy, comparisonId: 
   requireComparable(samples, settings)
   const sideAName = input.sideAName ?? from.sideAName
   const sideBName = input.sideBName ?? from.sideBName
+  const traces = tracesFrom(db, from, { alignmentId: alignment.id, samples, useTraces: input.useTraces })
   const differs = versionDifferences(
     { ...from, samples: kept, alignmentNumber: fromAlignment.number },
-    { alignmentId: alignment.id, alignmentNumber: alignment.number, sideAName, sideBName, settings, samples, engineVersion: ENGINE_VERSION })
+    { alignmentId: alignment.id, alignmentNumber: alignment.number, sideAName, sideBName, settings, samples, traces, engineVersion: ENGINE_VERSION })
   const isLatest = findVersion(db, comparison.id).number === from.number
   if (differs.length === 0 && isLatest) throw new DomainError('conflict', `Nothing differs from version ${from.number}; there is nothing to save.`)
   return {
     comparisonId: comparison.id, title: comparison.title, practice: comparison.practice, alignmentId: alignment.id,
-    sideAName, sideBName, settings, samples: samples.map(storeSample),
+    sideAName, sideBName, settings, samples: samples.map(storeSample), traces,
   }
 }
 

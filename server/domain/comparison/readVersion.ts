@@ -7,14 +7,15 @@ import { alignedMasses } from './alignedMasses'
 import type { FoundVersion } from './findComparison'
 import { sheetChanges } from './sheetChanges'
 import { readSamples, storeSample } from './storedSample'
+import { traceChanges } from './traceChanges'
 
 /** All of a version but its columns. Whoever calls has looked at the right to see it. */
 export function versionDetail(db: Database, version: FoundVersion, line: VersionLine): ComparisonDetail['version'] {
-  const { id, settings, engineVersion, cautions, alignmentId } = version
+  const { id, settings, engineVersion, cautions, alignmentId, traces } = version
   const samples = readSamples(version.samples)
   return {
-    ...line, ...alignedMasses(db, alignmentId), id, settings, engineVersion, cautions, samples: samples.map(storeSample), tables: versionTables(db, alignmentId),
-    sheetChanges: sheetChanges(db, alignmentId, samples),
+    ...line, ...alignedMasses(db, alignmentId), id, settings, engineVersion, cautions, traces, samples: samples.map(storeSample), tables: versionTables(db, alignmentId),
+    sheetChanges: sheetChanges(db, alignmentId, samples), traceChanges: traceChanges(db, { alignmentId, samples, traces }),
   }
 }
 

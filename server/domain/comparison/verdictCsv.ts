@@ -22,8 +22,10 @@ export function verdictCsv(db: Database, study: VisibleStudy, comparisonId: stri
     ...settingWords(version.settings).map(([name, value]) => `${name}: ${value}`),
     ...version.samples.flatMap(sample => sample.kind === 'sample' && sample.side ? [`Sample ${sample.name}: side ${sample.side}, preparation ${sample.preparation || sample.name}, floor ${sample.floor ?? 'not known'} (${sample.floorSource})`] : []),
     ...version.tables.map(table => `Table of ${table.sampleName}: ${table.fileName}, SHA-256 ${table.digest}`),
+    ...version.traces.map(({ position, fileName, sha256 }) => `Trace of ${version.samples[position]?.name ?? 'a sample'} looked into: ${fileName}, SHA-256 ${sha256}`),
     ...version.cautions.map(caution => `Caution: ${caution}`),
     ...version.sheetChanges.map(change => `Sample sheet changed since: ${change}`),
+    ...version.traceChanges.map(change => `Traces changed since: ${change}`),
   ]
   return versionCsv(version, packed, notes)
 }

@@ -48,7 +48,7 @@ function row(i: number, result: VerdictResult, settings: ComparisonSettings, nam
   return [
     i + 1, Number(c.mz[i]!.toFixed(6)), Number(c.retentionMinutes[i]!.toFixed(5)),
     verdictPhrase(c.verdict[i]!, settings.foldLimit, names, { reason: c.reason[i]!, atLeast: c.atLeast[i]! }), REASON_LABELS[reason], reasonSentence(i, result, settings, names),
-    2 ** c.log2Ratio[i]!, c.log2Ratio[i]!, c.low[i]!, c.high[i]!, METHOD_WORDS[METHODS[c.method[i]!]!], c.p[i]!, c.q[i]!, c.equivalenceP[i]!, c.reach[i]!, c.atLeast[i]!, c.traceRatio[i]!, c.traceSamples[i]!,
+    2 ** c.log2Ratio[i]!, c.log2Ratio[i]!, c.low[i]!, c.high[i]!, METHOD_WORDS[METHODS[c.method[i]!]!], c.p[i]!, c.q[i]!, c.equivalenceP[i]!, c.reach[i]!, c.atLeast[i]!, c.traceRatio[i]!, c.traceSamples[i] || null,
     c.detectedA[i]!, result.preparationsA, c.detectedB[i]!, result.preparationsB, c.levelA[i]!, c.levelB[i]!, c.blankRatioA[i]!, c.blankRatioB[i]!,
   ]
 }

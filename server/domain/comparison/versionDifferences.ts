@@ -1,6 +1,8 @@
 import { settingWords } from '../../../shared/science/verdict/settingWords'
 import type { ComparedSample, ComparisonSettings } from '../../../shared/science/verdict/settings'
+import type { UsedTrace } from '../../../shared/types/trace'
 import { sampleDifferences } from './sampleDifferences'
+import { traceDifferences } from './traceDifferences'
 
 export interface VersionContent {
   alignmentId: string
@@ -9,6 +11,7 @@ export interface VersionContent {
   sideBName: string
   settings: ComparisonSettings
   samples: readonly ComparedSample[]
+  traces: readonly UsedTrace[]
   engineVersion: string
 }
 
@@ -26,6 +29,7 @@ export function versionDifferences(before: VersionContent, after: VersionContent
     ...(before.sideBName === after.sideBName ? [] : [`Side B is called ${before.sideBName} → ${after.sideBName}.`]),
     ...settings,
     ...sampleDifferences(before.samples, after.samples, { handSides: true }),
+    ...traceDifferences(before, after),
     ...(before.engineVersion === after.engineVersion ? [] : [`Engine version ${before.engineVersion} → ${after.engineVersion}.`]),
   ]
 }

@@ -1,12 +1,6 @@
 import { massToleranceDa } from '../mass/tolerance'
 import { ascendingOrder } from '../numeric/ascendingOrder'
-
-/** Centroids of one trace in ascending m/z: columns of the same length. `scan` is the place of its scan among the trace's scans. */
-export interface Centroids {
-  mz: Float64Array
-  intensity: Float64Array | Float32Array
-  scan: Int32Array | Uint32Array | Uint16Array
-}
+import { lowerBound, type Centroids } from './centroids'
 
 /** One sample's trace as an alignment sees it. */
 export interface AlignedScans {
@@ -17,6 +11,8 @@ export interface AlignedScans {
   /** Lowest and highest m/z of its centroids, as the file has them. */
   lowestMz: number
   highestMz: number
+  /** Centroids below this intensity were not kept; 0: all were. */
+  intensityLimit: number
   /** Pieces that together hold each centroid of the range once; they may hold others too. Asked for in ascending m/z. */
   centroidsBetween: (lowestMz: number, highestMz: number) => readonly Centroids[]
 }
@@ -36,7 +32,8 @@ const FEATURES_A_STEP = 1000
  * and of the scans within the time tolerance the highest sum. Counts.
  *
  * 0 where nothing stands there; NaN where the trace does not cover the feature: its mass window lies beyond all centroids, its time
- * outside the first and last scan, or no scan within the time tolerance. A mass offset shifts the window instead of the centroids.
+ * outside the first and last scan, or no scan within the time tolerance; or where nothing of it was kept and centroids below a limit
+ * were not, so that what stands there is not known. A mass offset shifts the window instead of the centroids.
  *
  * @param mz m/z of the aligned features, in any order
  * @param minutes their times, common time
@@ -53,7 +50,7 @@ export function highestSignals(mz: Float64Array, minutes: Float64Array, trace: A
     const low = (mz[i]! - tolerance) * shift
     const high = (mz[i]! + tolerance) * shift
     if (high < trace.lowestMz || low > trace.highestMz) return
-    const first = firstAtLeast(scans.minutes, minutes[i]! - window.retentionMinutes)
+    const first = lowerBound(scans.minutes, minutes[i]! - window.retentionMinutes)
     const end = firstAbove(scans.minutes, minutes[i]! + window.retentionMinutes)
     if (first >= end || !(minutes[i]! >= scans.minutes[0]!) || !(minutes[i]! <= scans.minutes.at(-1)!)) return
     for (const piece of trace.centroidsBetween(low, high)) addCentroids(piece, low, high, scans.rank, first, end, sum)
@@ -62,7 +59,7 @@ export function highestSignals(mz: Float64Array, minutes: Float64Array, trace: A
       if (sum[s]! > most) most = sum[s]!
       sum[s] = 0
     }
-    highest[i] = most
+    highest[i] = most === 0 && trace.intensityLimit > 0 ? Number.NaN : most
   })
   return highest
 }
@@ -81,21 +78,10 @@ function scansInOrder(scanMinutes: Float64Array) {
 
 /** Adds the centroids between two m/z to the sums of their scans, for scans of rank `first` up to `end`. */
 function addCentroids({ mz, intensity, scan }: Centroids, low: number, high: number, rank: Int32Array, first: number, end: number, sum: Float64Array): void {
-  for (let c = firstAtLeast(mz, low); c < mz.length && mz[c]! <= high; c++) {
+  for (let c = lowerBound(mz, low); c < mz.length && mz[c]! <= high; c++) {
     const place = rank[scan[c]!]!
     if (place >= first && place < end) sum[place]! += intensity[c]!
   }
-}
-
-function firstAtLeast(ascending: Float64Array, value: number): number {
-  let low = 0
-  let high = ascending.length
-  while (low < high) {
-    const middle = (low + high) >> 1
-    if (ascending[middle]! < value) low = middle + 1
-    else high = middle
-  }
-  return low
 }
 
 function firstAbove(ascending: Float64Array, value: number): number {

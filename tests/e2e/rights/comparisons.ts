@@ -6,7 +6,7 @@ import type { RightsFile, RightsRow } from '../../support/rights'
 const base = '/api/studies/[studyId]/comparisons'
 const one = `${base}/[comparisonId]`
 const columns = (letter: string) => [{ name: `${letter}1`, side: 'A' as const, intensity: [1000, 900] }, { name: `${letter}2`, side: 'B' as const, intensity: [1000, 4000] }]
-const newVersion: RightsRow['body'] = () => ({ from: 1, settings: { ...comparisonDefaults, foldLimit: 0.5 } })
+const newVersion: RightsRow['body'] = () => ({ from: 1, settings: { ...comparisonDefaults, foldLimit: 0.5 }, useTraces: true })
 const official = { from: { comparisonId: 'comparedId' } }
 /** A practice copy is there for the student who made it, and for nobody else. */
 const practice: Pick<RightsRow, 'from' | 'except'> = {

@@ -8,6 +8,7 @@ import type { Person } from '../../../server/domain/person/person'
 import type { VisibleStudy } from '../../../server/domain/study/findVisibleStudy'
 import { alignmentDefaults } from '../../../shared/science/alignment/settings'
 import { newComparisonSchema, newVersionSchema } from '../../../shared/schemas/comparison'
+import { ENGINE_VERSION } from '../../../shared/science/engineVersion'
 import { comparisonDefaults } from '../../../shared/science/verdict/settings'
 import { addComparedAlignment } from '../../support/comparedAlignment'
 import { none } from '../../support/comparisonInput'
@@ -98,7 +99,7 @@ describe('the verdict CSV', () => {
     const text = await read(official, reviewer, 1)
     const lines = text.split('\r\n')
     expect(text.startsWith('\uFEFF"# Steelyard: verdicts') || text.startsWith('\uFEFF# Steelyard: verdicts')).toBe(true)
-    for (const expected of ['Ratios are B over A.', 'Engine version 1', 'Reach limit: ×3', 'SHA-256 ', 'Caution: Assumed precision', 'floor 10 (stated)']) expect(text).toContain(expected)
+    for (const expected of ['Ratios are B over A.', `Engine version ${ENGINE_VERSION}`, 'Reach limit: ×3', 'SHA-256 ', 'Caution: Assumed precision', 'floor 10 (stated)']) expect(text).toContain(expected)
     const header = lines.findIndex(line => line.startsWith('feature,'))
     expect(lines.length - header - 2).toBe(3)
     expect(lines[header + 3]).toContain('found only in A')

@@ -2,7 +2,8 @@ import fc from 'fast-check'
 import { describe, expect, it } from 'vitest'
 import { massToleranceDa } from '../../../shared/science/mass/tolerance'
 import { correctScans } from '../../../shared/science/traces/correctScans'
-import { highestSignals, type AlignedScans, type Centroids, type SignalWindow } from '../../../shared/science/traces/highestSignals'
+import type { Centroids } from '../../../shared/science/traces/centroids'
+import { highestSignals, type AlignedScans, type SignalWindow } from '../../../shared/science/traces/highestSignals'
 import { manyCentroids, slicedTrace } from '../../support/manyCentroids'
 import { seededRandom } from '../../support/seededRandom'
 
@@ -67,6 +68,8 @@ describe('the highest signal in a trace', () => {
     expect(one([[300, 40, 50]], 300, 2.05)).toBeNaN()
     expect(one([], 300, 1, { scanMinutes: Float64Array.of(0, 0.5, 0.8, 1.2, 2) })).toBeNaN()
     expect(one([], 300, 1, { scanMinutes: new Float64Array(0) })).toBeNaN()
+    expect(one([], 300, 1, { intensityLimit: 20 })).toBeNaN()
+    expect(one([[300, 20, 50]], 300, 1, { intensityLimit: 20 })).toBe(50)
   })
 
   it('follows corrected times, also where their order is no longer that of the scans', () => {
