@@ -10,13 +10,14 @@ import { packVerdicts } from '../../shared/formats/verdictColumns'
 import { decideVerdicts } from '../../shared/science/verdict/decideVerdicts'
 import { comparisonDefaults, type ComparisonSettings } from '../../shared/science/verdict/settings'
 import { summariseSides } from '../../shared/science/verdict/summariseSides'
+import type { UsedTrace } from '../../shared/types/trace'
 
 /** A comparison with one version, judged and kept without a job; of an alignment made by addComparedAlignment. Gives its id. */
-export function addKeptComparison({ db }: Pick<OpenDatabase, 'db'>, studyId: string, createdBy: string, alignmentId: string, { practice = false, title = 'Millrace against Tallow Lane', settings = {} as Partial<ComparisonSettings>, comparisonId = null as string | null } = {}) {
+export function addKeptComparison({ db }: Pick<OpenDatabase, 'db'>, studyId: string, createdBy: string, alignmentId: string, { practice = false, title = 'Millrace against Tallow Lane', settings = {} as Partial<ComparisonSettings>, comparisonId = null as string | null, traces = [] as UsedTrace[] } = {}) {
   const all = { ...comparisonDefaults, ...settings }
   const samples = snapshotSamples(db, alignmentId).map(sample => ({ ...sample, floor: Number.isNaN(sample.floor) ? 10 : sample.floor }))
   const result = decideVerdicts(summariseSides({ ...alignmentData(db, alignmentId), samples, normaliseByAmount: all.normaliseByAmount }), all)
-  return keepVersion(db, studyId, { comparisonId, title, practice, alignmentId, sideAName: 'Millrace', sideBName: 'Tallow Lane', settings: all, samples: samples.map(storeSample) },
+  return keepVersion(db, studyId, { comparisonId, title, practice, alignmentId, sideAName: 'Millrace', sideBName: 'Tallow Lane', settings: all, samples: samples.map(storeSample), traces },
     { samples, counts: result.counts, cautions: result.cautions, columns: gzipSync(packVerdicts(result)) }, createdBy)
 }
 

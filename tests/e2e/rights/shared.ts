@@ -3,6 +3,7 @@ import { people } from '../../../server/db/schema'
 import { createShareLink } from '../../../server/domain/share/createShareLink'
 import { withdrawShareLink } from '../../../server/domain/share/withdrawShareLink'
 import { newSecret } from '../../../server/domain/secret/secret'
+import { addBareTrace } from '../../support/bareTrace'
 import { addComparedAlignment } from '../../support/comparedAlignment'
 import { addKeptComparison, versionIdOf } from '../../support/keptComparison'
 import { addTestPerson } from '../../support/laboratory'
@@ -15,9 +16,13 @@ const file: RightsFile = {
   prepare: (fixture, laboratory) => {
     const { db } = laboratory
     const { studyId = '', analystId = '' } = fixture
-    const align = (b: number) => addComparedAlignment(laboratory, studyId, analystId, [{ name: `shared A ${b}`, side: 'A', intensity: [1000, 900] }, { name: `shared B ${b}`, side: 'B', intensity: [1000, b] }]).alignment.id
-    const comparisonId = addKeptComparison(laboratory, studyId, analystId, align(4000))
-    addKeptComparison(laboratory, studyId, analystId, align(90_000), { comparisonId, settings: { reachLimit: 4 } })
+    const keep = (b: number, rest: Parameters<typeof addKeptComparison>[4] = {}) => {
+      const { alignment, placed: [first] } = addComparedAlignment(laboratory, studyId, analystId, [{ name: `shared A ${b}`, side: 'A', intensity: [1000, 900] }, { name: `shared B ${b}`, side: 'B', intensity: [1000, b] }])
+      const traces = first ? [addBareTrace(laboratory, studyId, analystId, { position: 0, sampleId: first.sampleId }, `shared A ${b}.mzML`, [1, 2, b])] : []
+      return addKeptComparison(laboratory, studyId, analystId, alignment.id, { ...rest, traces })
+    }
+    const comparisonId = keep(4000)
+    keep(90_000, { comparisonId, settings: { reachLimit: 4 } })
     const maker = addTestPerson(laboratory, 'reviewer')
     const link = (number: number, days = 30, allowExport = true, now = new Date()) =>
       createShareLink(db, studyId, { versionId: versionIdOf(laboratory, comparisonId, number), label: '', days, allowExport }, maker, now)

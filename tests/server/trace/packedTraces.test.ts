@@ -1,7 +1,7 @@
 import { eq } from 'drizzle-orm'
 import { afterEach, beforeEach, describe, expect, it } from 'vitest'
 import { packFloat64 } from '../../../server/db/packed'
-import { alignmentTables, comparisonVersions, traces } from '../../../server/db/schema'
+import { alignmentTables, traces } from '../../../server/db/schema'
 import { comparisonExtracted, comparisonTraces } from '../../../server/domain/comparison/comparisonTraces'
 import { DomainError } from '../../../server/domain/DomainError'
 import type { Person } from '../../../server/domain/person/person'
@@ -38,16 +38,12 @@ afterEach(() => laboratory.close())
 const total = (number?: number) => unpackSampleTraces(comparisonTraces(laboratory.db, studyId, comparisonId, analyst, number))
 const extracted = async (features: number[]) => unpackExtractedTraces(await comparisonExtracted(laboratory, studyId, comparisonId, analyst, { features }))
 const link = () => ({ studyId, versionId: versionIdOf(laboratory, comparisonId), allowExport: false, endsAt: new Date() })
-/** Versions are closed by triggers, so the one of this test is made with what it looked into. */
+/** A second version that looked into these files. */
 function lookInto(fileNames: readonly string[]) {
-  const all = laboratory.db.select().from(traces).all()
-  const used = fileNames.flatMap((fileName) => {
-    const trace = all.find(each => each.fileName === fileName)
-    return trace ? [{ position: fileName.startsWith('M1') ? 0 : 2, traceId: trace.id, fileName, sha256: trace.sha256 }] : []
-  })
-  const [version] = laboratory.db.select().from(comparisonVersions).where(eq(comparisonVersions.comparisonId, comparisonId)).all()
-  if (!version) throw new Error('no version')
-  return laboratory.db.insert(comparisonVersions).values({ ...version, id: 'looked', number: 2, traces: used }).returning().get()
+  const standing = laboratory.db.select().from(traces).all().filter(({ fileName }) => fileNames.includes(fileName))
+  const used = standing.map(({ id, fileName, sha256 }) => ({ position: fileName.startsWith('M1') ? 0 : 2, traceId: id, fileName, sha256 }))
+  addKeptComparison(laboratory, studyId, analyst.id, alignmentId, { comparisonId, traces: used })
+  return versionIdOf(laboratory, comparisonId, 2)
 }
 
 describe('the traces of a version', () => {
@@ -108,7 +104,7 @@ describe('a guest', () => {
   it('gets what the version looked into and nothing that came besides', async () => {
     expect(unpackSampleTraces(sharedTraces(laboratory.db, link()))).toEqual([])
     expect(unpackExtractedTraces(await sharedExtracted(laboratory, link(), [0]))).toEqual([])
-    const looked = { ...link(), versionId: lookInto(['M1.mzML']).id }
+    const looked = { ...link(), versionId: lookInto(['M1.mzML']) }
     expect(unpackSampleTraces(sharedTraces(laboratory.db, looked)).map(({ fileName }) => fileName)).toEqual(['M1.mzML'])
     expect(unpackExtractedTraces(await sharedExtracted(laboratory, looked, [0])).map(({ position }) => position)).toEqual([0])
   })
