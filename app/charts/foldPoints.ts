@@ -22,6 +22,8 @@ export interface FoldPoints {
   /** The same of the lanes; NaN where both are empty. */
   lowestReach: number
   highestReach: number
+  lowestMz: number
+  highestMz: number
   /** Drawn below the line of q = 1, because they were not tested. */
   untested: number
   /** Compared features without a place: no ratio, and no reach that is known. */
@@ -51,7 +53,7 @@ export function placeFeatures(columns: VerdictColumns): FoldPoints {
   const kind: FoldPlotKind = columns.method.includes(METHOD.welch) ? 'certainty' : 'abundance'
   const points: FoldPoints = {
     kind, place: new Uint8Array(features), x: new Float64Array(features), y: new Float64Array(features),
-    widest: 0, lowest: Number.POSITIVE_INFINITY, highest: Number.NEGATIVE_INFINITY, lowestReach: Number.NaN, highestReach: Number.NaN, untested: 0, notDrawn: 0,
+    widest: 0, lowest: Number.POSITIVE_INFINITY, highest: Number.NEGATIVE_INFINITY, lowestReach: Number.NaN, highestReach: Number.NaN, lowestMz: Number.NaN, highestMz: Number.NaN, untested: 0, notDrawn: 0,
   }
   for (let i = 0; i < features; i++) {
     if (columns.verdict[i] === VERDICT.inNeither) continue
@@ -75,6 +77,8 @@ export function placeFeatures(columns: VerdictColumns): FoldPoints {
     points.y[i] = reach
     if (!(points.lowestReach <= reach)) points.lowestReach = reach
     if (!(points.highestReach >= reach)) points.highestReach = reach
+    if (!(points.lowestMz <= points.x[i]!)) points.lowestMz = points.x[i]!
+    if (!(points.highestMz >= points.x[i]!)) points.highestMz = points.x[i]!
   }
   return points
 }

@@ -11,35 +11,61 @@ export interface FoldSeries { option: ScatterSeriesOption, features: Int32Array 
 const DRAWN: readonly Verdict[] = ['setAside', 'unsettled', 'level', 'moreA', 'moreB', 'onlyA', 'onlyB']
 const GRIDS = [PLACE.ratios, PLACE.laneA, PLACE.laneB] as const
 
+/** So many marks and more are drawn smaller, or they hide each other; below 4 px the drawing library fills squares, whatever the shape. */
+const CROWDED = 8000
+
 /** One series a verdict and grid, of the features among `rows`; a cross is two thin bars, since large series know only simple shapes. */
 export function foldSeries(points: FoldPoints, verdict: Uint8Array, rows: Int32Array, palette: Palette): FoldSeries[] {
   const series: FoldSeries[] = []
+  const groups = groupRows(points, verdict, rows)
+  const smaller = rows.length >= CROWDED ? 0.75 : 1
   for (const name of DRAWN) {
     GRIDS.forEach((place, grid) => {
-      const features = rows.filter(i => verdict[i] === VERDICT[name] && points.place[i] === place)
-      if (features.length === 0) return
+      const features = groups.get(groupOf(VERDICT[name], place))
+      if (!features) return
       const data = new Float64Array(features.length * 2)
       features.forEach((feature, at) => {
         data[2 * at] = points.x[feature]!
         data[2 * at + 1] = points.y[feature]!
       })
-      marks(name, palette).forEach((mark, part) => series.push({
+      marks(name, palette, smaller).forEach((mark, part) => series.push({
         features,
-        option: { ...mark, type: 'scatter', id: `${name}-${grid}-${part}`, name, xAxisIndex: grid, yAxisIndex: grid, data, dimensions: ['x', 'y'], large: true, largeThreshold: 0, progressive: 0, animation: false, emphasis: { disabled: true } },
+        option: { ...mark, type: 'scatter', id: `${name}-${grid}-${part}`, name, xAxisIndex: grid, yAxisIndex: grid, data, dimensions: ['x', 'y'], large: true, largeThreshold: 0, progressive: 0, animation: false, silent: true, emphasis: { disabled: true } },
       }))
     })
   }
   return series
 }
 
-function marks(name: Verdict, palette: Palette): Pick<ScatterSeriesOption, 'symbol' | 'symbolSize' | 'itemStyle'>[] {
+const groupOf = (verdict: number, place: number) => 4 * verdict + place
+
+/** The rows by verdict and place, counted first, so that each group is one array. */
+function groupRows({ place }: FoldPoints, verdict: Uint8Array, rows: Int32Array): Map<number, Int32Array> {
+  const counts = new Map<number, number>()
+  for (const i of rows) {
+    const group = groupOf(verdict[i]!, place[i]!)
+    counts.set(group, (counts.get(group) ?? 0) + 1)
+  }
+  const groups = new Map([...counts].map(([group, count]) => [group, new Int32Array(count)]))
+  const filled = new Map<number, number>()
+  for (const i of rows) {
+    const group = groupOf(verdict[i]!, place[i]!)
+    const at = filled.get(group) ?? 0
+    const features = groups.get(group)
+    if (features) features[at] = i
+    filled.set(group, at + 1)
+  }
+  return groups
+}
+
+function marks(name: Verdict, palette: Palette, smaller: number): Pick<ScatterSeriesOption, 'symbol' | 'symbolSize' | 'itemStyle'>[] {
   const { shape, colour } = verdictLooks[name]
   const color = palette[colour]
   switch (shape) {
-    case 'circle': return [{ symbol: 'circle', symbolSize: 6, itemStyle: { color, opacity: 0.85 } }]
-    case 'square': return [{ symbol: 'rect', symbolSize: 5, itemStyle: { color, opacity: 0.85 } }]
-    case 'dash': return [{ symbol: 'rect', symbolSize: [7, 2], itemStyle: { color, opacity: 0.75 } }]
-    case 'ring': return [{ symbol: 'circle', symbolSize: 5, itemStyle: { color: 'transparent', borderColor: color, borderWidth: 1.2, opacity: 0.75 } }]
+    case 'circle': return [{ symbol: 'circle', symbolSize: 6 * smaller, itemStyle: { color, opacity: 0.85 } }]
+    case 'square': return [{ symbol: 'rect', symbolSize: 5 * smaller, itemStyle: { color, opacity: 0.85 } }]
+    case 'dash': return [{ symbol: 'rect', symbolSize: [7 * smaller, 2], itemStyle: { color, opacity: 0.75 } }]
+    case 'ring': return [{ symbol: 'circle', symbolSize: Math.max(4, 5 * smaller), itemStyle: { color: 'transparent', borderColor: color, borderWidth: 1.2, opacity: 0.75 } }]
     case 'cross': return ([[1.2, 5], [5, 1.2]] as const).map(([width, height]) => ({ symbol: 'rect', symbolSize: [width, height], itemStyle: { color, opacity: 0.75 } }))
   }
 }
@@ -52,7 +78,7 @@ export function flaggedSeries(points: FoldPoints, verdict: Uint8Array, flagged: 
     return [{
       features,
       option: {
-        type: 'scatter', id: `flagged-${grid}`, name: 'flagged', xAxisIndex: grid, yAxisIndex: grid, z: 5, animation: false,
+        type: 'scatter', id: `flagged-${grid}`, name: 'flagged', xAxisIndex: grid, yAxisIndex: grid, z: 5, animation: false, silent: true,
         symbol: 'diamond', symbolSize: 14, itemStyle: { color: 'transparent', borderColor: palette.ink, borderWidth: 1.5 },
         data: [...features].map(i => [points.x[i]!, points.y[i]!]),
       },

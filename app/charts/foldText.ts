@@ -15,7 +15,7 @@ export function foldText(result: Pick<VerdictResult, 'counts' | 'testedFeatures'
   return [
     `Left is more in ${names.a} (${formatCount(counts.moreA)}), right more in ${names.b} (${formatCount(counts.moreB)}), between the lines level within ${fold} (${formatCount(counts.level)}).`,
     `${upwards}.`,
-    `In the lanes at the edges stands what only one side shows, at its reach: found only in ${names.a} ${formatCount(counts.onlyA)}, only in ${names.b} ${formatCount(counts.onlyB)}; below ${times(settings.reachLimit)} the other side could not have shown it.`,
+    `In the lanes stands what only one side shows, at its reach: found only in ${names.a} ${formatCount(counts.onlyA)}, only in ${names.b} ${formatCount(counts.onlyB)}; below ${times(settings.reachLimit)} the other side could not have shown it.`,
     points.untested > 0 ? `${formatCount(points.untested)} with a ratio but no test stand below the plot.` : '',
     points.notDrawn > 0 ? `${formatCount(points.notDrawn)} have neither ratio nor reach and stand in the table only.` : '',
   ].filter(Boolean).join(' ')

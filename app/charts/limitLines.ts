@@ -4,8 +4,8 @@ import { threeDigits, times } from '#shared/science/numeric/numberWords'
 import { fonts, type Palette } from '#shared/tokens'
 import type { FoldPoints } from '~/charts/foldPoints'
 
-/** The limits as lines, each with its value: fold and alpha on the plot of ratios, reach in both lanes. */
-export function limitLines(points: FoldPoints, { foldLimit, alpha, reachLimit }: Pick<ComparisonSettings, 'foldLimit' | 'alpha' | 'reachLimit'>, palette: Palette): ScatterSeriesOption[] {
+/** The limits as lines, each with its value where labels are wished: fold and alpha on the plot of ratios, reach in both lanes. */
+export function limitLines(points: FoldPoints, { foldLimit, alpha, reachLimit }: Pick<ComparisonSettings, 'foldLimit' | 'alpha' | 'reachLimit'>, palette: Palette, labels: boolean): ScatterSeriesOption[] {
   const fold = times(2 ** foldLimit)
   const lines: { at: { xAxis?: number, yAxis?: number }, text: string, grid: number }[] = [
     { at: { xAxis: -foldLimit }, text: fold, grid: 0 },
@@ -19,7 +19,7 @@ export function limitLines(points: FoldPoints, { foldLimit, alpha, reachLimit }:
       silent: true, symbol: 'none', animation: false,
       lineStyle: { color: palette.muted, type: 'dashed', width: 1 },
       data: lines.filter(line => line.grid === grid).map(({ at, text }) => ({
-        ...at, label: { formatter: text, color: palette.muted, fontFamily: fonts.text, fontSize: 11, position: grid === 0 && at.yAxis === undefined ? 'end' : 'insideEndTop', distance: at.yAxis === undefined ? 3 : 2 },
+        ...at, label: { show: labels, formatter: text, color: palette.muted, fontFamily: fonts.text, fontSize: 11, position: grid === 0 && at.yAxis === undefined ? 'end' : 'insideEndTop', distance: at.yAxis === undefined ? 3 : 2 },
       })),
     },
   }))

@@ -1,5 +1,6 @@
 import { initialView, isFilteredView, MOST_PICKED, withoutFilter, type BenchView } from '~/utils/benchView'
 import { sortedAlsoBy, sortedBy, type SortKey } from '~/utils/featureOrder'
+import type { PlotWindow } from '~/utils/plotWindow'
 import type { Verdict } from '#shared/science/verdict/verdicts'
 
 /** What is selected, picked, filtered, looked for, sorted and drawn on the bench: one truth for plots, bar, table and card. */
@@ -36,6 +37,15 @@ export const useBenchStore = defineStore('bench', {
     /** Sorts by one more key where those before are equal. */
     sortAlsoBy(key: SortKey) {
       this.sort = sortedAlsoBy(this.sort, key)
+    },
+    /** Shows a part of the plot of ratios; null: all of it. */
+    showWindow(shown: PlotWindow | null) {
+      this.foldWindow = shown
+      this.closeUp = false
+    },
+    /** Every plot shows the surroundings of the selected feature, or what it showed before. */
+    toggleCloseUp() {
+      this.closeUp = !this.closeUp && this.selected !== null
     },
     clearFilter() {
       this.$patch(withoutFilter())

@@ -73,3 +73,9 @@ export function isDefault(field: SettingField, settings: ComparisonSettings): bo
 export function sameSettings(one: ComparisonSettings, other: ComparisonSettings): boolean {
   return JSON.stringify(one) === JSON.stringify(other)
 }
+
+/** The draft after a change of it; null where all is as saved again. */
+export function changedDraft(saved: ComparisonSettings, draft: ComparisonSettings | null, part: Partial<ComparisonSettings>): ComparisonSettings | null {
+  const next = { ...(draft ?? saved), ...part }
+  return sameSettings(next, saved) ? null : next
+}

@@ -98,7 +98,7 @@ describe('the bench with 50,000 features', () => {
 
   it('previews other limits at once and saves them as a new version', () => onBench('', async (page) => {
     await page.getByText('Limits and settings').click()
-    await page.getByLabel('Reach limit').fill('20')
+    await page.locator('details').getByLabel('Reach limit').fill('20')
     await page.getByText('Preview, not saved.').waitFor()
     await page.getByRole('button', { name: 'Save as a new version' }).click()
     await page.getByText('Reach limit: ×5 before, ×20 now').or(page.getByText(/Against version 2:.*×20/)).first().waitFor({ timeout: 60_000 })
@@ -108,7 +108,7 @@ describe('the bench with 50,000 features', () => {
 
   it('lets a student try limits but not save them', () => onBench('', async (page) => {
     await page.getByText('Limits and settings').click()
-    await page.getByLabel('Fold limit').fill('4')
+    await page.locator('details').getByLabel('Fold limit').fill('4')
     await page.getByText('Preview, not saved.').waitFor()
     expect(await page.getByRole('button', { name: 'Save as a new version' }).count()).toBe(0)
   }, { signInName: 'student' }))

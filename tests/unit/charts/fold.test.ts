@@ -1,5 +1,6 @@
 import { describe, expect, it } from 'vitest'
-import { escapeMarkup, foldOption } from '../../../app/charts/foldOption'
+import { foldFrame } from '../../../app/charts/foldFrame'
+import { foldOption } from '../../../app/charts/foldOption'
 import { MOST_CERTAIN, PLACE, placeFeatures } from '../../../app/charts/foldPoints'
 import { flaggedSeries, foldSeries } from '../../../app/charts/foldSeries'
 import { foldText } from '../../../app/charts/foldText'
@@ -83,7 +84,12 @@ describe('series of the fold-change plot', () => {
 })
 
 describe('option of the fold-change plot', () => {
-  const option = foldOption({ points, series, settings: many.settings, names, palette: light, hint: i => [`feature ${i}`, '<b>'], narrow: false, zoom: null })
+  const optionOf = (shown: Parameters<typeof foldFrame>[0]['shown'] = null, limitLabels = true) => {
+    const frame = foldFrame({ points, settings: many.settings, narrow: false, width: 900, shown })
+    return foldOption({ points, frame, series, settings: many.settings, names, palette: light, limitLabels })
+  }
+  const option = optionOf()
+  const drawn = (of: typeof option) => of.series as { id: string, silent?: boolean, markLine?: { data: { label: { show: boolean, formatter: string } }[] } }[]
 
   it('leans A to the left and B to the right of an even middle', () => {
     const [ratios] = option.xAxis as { min: number, max: number }[]
@@ -91,20 +97,26 @@ describe('option of the fold-change plot', () => {
     expect(ratios?.max).toBeGreaterThanOrEqual(points.widest)
   })
 
-  it('draws the limits with their values', () => {
-    const drawn = JSON.stringify((option.series as { id: string, markLine?: unknown }[]).filter(each => each.id.startsWith('limits')).map(each => each.markLine))
-    for (const text of ['×2', 'q 0.05', '×3']) expect(drawn).toContain(`"${text}"`)
+  it('has both lanes over the same m/z, so that they can be compared', () => {
+    const [, laneA, laneB] = option.xAxis as { min: number, max: number }[]
+    expect([laneA?.min, laneA?.max]).toEqual([laneB?.min, laneB?.max])
+    expect(laneA?.min).toBeLessThanOrEqual(points.lowestMz)
+    expect(laneA?.max).toBeGreaterThanOrEqual(points.highestMz)
   })
 
-  it('escapes what a hint says', () => {
-    const { formatter } = option.tooltip as { formatter: (mark: { seriesId: string, dataIndex: number }) => string }
-    const [shown] = series
-    expect(formatter({ seriesId: String(shown?.option.id), dataIndex: 0 })).toBe(`feature ${shown?.features[0]}<br>&lt;b&gt;`)
-    expect(escapeMarkup('<img onerror="x">\'&')).toBe('&lt;img onerror=&quot;x&quot;&gt;&#39;&amp;')
+  it('draws the limits with their values, or without where handles say them', () => {
+    const labels = (of: typeof option) => drawn(of).flatMap(({ markLine }) => markLine?.data.flatMap(({ label }) => label.show ? [label.formatter] : []) ?? [])
+    expect(labels(option)).toEqual(['×2', '×2', 'q 0.05', '×3', '×3'])
+    expect(labels(optionOf(null, false))).toEqual([])
+  })
+
+  it('has no mark that answers the pointer, which would search through all', () => {
+    expect(drawn(option).every(({ silent }) => silent)).toBe(true)
+    expect(option.tooltip).toBeUndefined()
   })
 
   it('shows the part it is zoomed to', () => {
-    const zoomed = foldOption({ points, series, settings: many.settings, names, palette: light, hint: () => [], narrow: false, zoom: { x: [1, 2], y: [3, 4] } })
+    const zoomed = optionOf({ x: [1, 2], y: [3, 4] })
     expect((zoomed.xAxis as { min: number }[])[0]?.min).toBe(1)
     expect((zoomed.yAxis as { max: number }[])[0]?.max).toBe(4)
   })
