@@ -4,7 +4,7 @@ import { VERDICT, type Verdict } from '#shared/science/verdict/verdicts'
 import type { Palette } from '#shared/tokens'
 import { chartText } from '~/charts/axis'
 import { along, axisNumber, componentAxis, componentGrid, componentHint, componentTitle, zeroLines } from '~/charts/componentAxis'
-import { escapeMarkup } from '~/charts/foldOption'
+import { escapeMarkup } from '~/charts/escapeMarkup'
 import { verdictMarks } from '~/charts/verdictMarks'
 import type { PlotWindow } from '~/utils/plotWindow'
 

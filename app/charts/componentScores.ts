@@ -8,7 +8,7 @@ import { chartText } from '~/charts/axis'
 import { along, axisNumber, componentAxis, componentGrid, componentHint, componentTitle, zeroLines } from '~/charts/componentAxis'
 import { samplesByGroup, type ComponentSample } from '~/charts/componentSamples'
 import { markPath } from '~/charts/drawing'
-import { escapeMarkup } from '~/charts/foldOption'
+import { escapeMarkup } from '~/charts/escapeMarkup'
 import { groupLabels, type SampleGroup } from '~/charts/sampleValues'
 
 /** One sample on the plot of two components. */

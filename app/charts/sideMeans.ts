@@ -3,9 +3,9 @@ import { studentQuantile } from '#shared/science/statistics/studentQuantile'
 import { chooseSamples } from '#shared/science/verdict/chooseSamples'
 import type { ComparisonSettings } from '#shared/science/verdict/settings'
 import { summariseSides } from '#shared/science/verdict/summariseSides'
+import type { Signal } from '~/utils/benchView'
 
-/** Which signal is drawn: in the comparison's normalised counts, or as each table states it. */
-export type Signal = 'normalised' | 'injected'
+export type { Signal }
 
 export interface PreparationMean { label: string, log2: number }
 

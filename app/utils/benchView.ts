@@ -5,7 +5,6 @@ import type { FeaturesPresent } from '#shared/science/components/chooseFeatures'
 import type { ComponentScaling } from '#shared/science/components/scaleFeatures'
 import { readArea, writeArea, type PlotArea } from '~/utils/plotArea'
 import { readWindow, writeWindow, type PlotWindow } from '~/utils/plotWindow'
-import type { Signal } from '~/charts/sideMeans'
 import { MOST_SORTS, SORT_KEYS, type FeatureSort } from '~/utils/featureOrder'
 import { readFormula, readMass, writeFormula, writeMass, type FormulaTarget, type MassTarget } from '~/utils/massTarget'
 import { OPEN_RANGE, readRange, writeRange, type NumberRange } from '~/utils/numberRange'
@@ -33,10 +32,11 @@ export type FlagFilter = 'all' | 'flagged' | FlagKind
 export const PLOTS = ['fold', 'components', 'abundance'] as const
 export type Plot = (typeof PLOTS)[number]
 
-/** How the abundance plot lays its samples out, and which signal it draws. */
+/** How the abundance plot lays its samples out, and which signal it draws: in the comparison's normalised counts, or as each table states it. */
 export const ABUNDANCE_LAYOUTS = ['preparation', 'run'] as const
 export type AbundanceLayout = (typeof ABUNDANCE_LAYOUTS)[number]
 export const SIGNALS = ['normalised', 'injected'] as const
+export type Signal = (typeof SIGNALS)[number]
 
 /** So many features can be picked beside the selected one and stand in the address. */
 export const MOST_PICKED = 100
