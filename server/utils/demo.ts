@@ -1,6 +1,6 @@
 import type { DemoState } from '../../shared/types/demo'
 import { makeDemo } from '../domain/demo/makeDemo'
-import { publicFileNames } from '../domain/demo/publicFiles'
+import { publicFileNames, publicTraceNames } from '../domain/demo/publicFiles'
 import type { Laboratory } from './laboratory'
 
 const state: Omit<DemoState, 'files'> = { making: false, now: '', problem: null }
@@ -25,4 +25,4 @@ export async function stopDemo() {
   await made
 }
 
-export const demoState = (): DemoState => ({ ...state, files: publicFileNames })
+export const demoState = (): DemoState => ({ ...state, files: publicFileNames, traceFiles: publicTraceNames })

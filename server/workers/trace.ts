@@ -7,6 +7,7 @@ import { TraceGatherer } from '../../shared/science/traces/gatherTraces'
 import { isPoint } from '../../shared/science/traces/scanSignal'
 import { sortCentroids } from '../../shared/science/traces/sortCentroids'
 import { packSlice } from '../domain/trace/files/centroidBytes'
+import { flushFolder } from '../domain/trace/files/flushFolder'
 import { CentroidSpill } from '../domain/trace/files/spillCentroids'
 import { traceRemarks } from '../domain/trace/files/traceRemarks'
 import { slicePath, traceFolder, unfinishedFolder } from '../domain/trace/files/traceFolder'
@@ -49,6 +50,7 @@ async function read(): Promise<ReadTrace> {
   const { odd } = gatherer
   const { traces, place } = gatherer.take()
   const kept = writeSlices(spill, place)
+  await flushFolder(unfinished)
   renameSync(unfinished, traceFolder(task.folder, task.traceId))
   return { polarity: task.polarity, traces, scans: traces.minutes.length, ...kept, profile: profileScans > 0, remarks: traceRemarks({ withoutTime, odd, profileScans, scans: traces.minutes.length }) }
 }
@@ -71,7 +73,7 @@ function writeSlices(spill: CentroidSpill, place: Int32Array): Pick<ReadTrace, '
     lowestMz = Math.min(lowestMz, points.mz[0]!)
     highestMz = Math.max(highestMz, points.mz.at(-1)!)
     const bytes = packSlice(points)
-    writeFileSync(slicePath(unfinished, slice), bytes, { mode: 0o600, flush: true })
+    writeFileSync(slicePath(unfinished, slice), bytes, { mode: 0o600 })
     keptBytes += bytes.length
   })
   return { centroids: spill.points, keptBytes, lowestMz, highestMz }

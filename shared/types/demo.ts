@@ -5,6 +5,7 @@ export interface DemoState {
   now: string
   /** Why it ended before it was whole, as a sentence. */
   problem: string | null
-  /** Names of the files under /demo/ to try an upload with. */
+  /** Names of the tables under /demo/ to try an upload with, the sample sheet first; and of raw data. */
   files: string[]
+  traceFiles: string[]
 }

@@ -32,7 +32,7 @@ async function main() {
   try {
     const path = join(laboratory.folder, 'run.mzML')
     const file = openSync(path, 'w')
-    for (const piece of writeMzml(SCANS, scans(), { zlib: true, intensityBits: 32 })) writeSync(file, piece)
+    for (const piece of writeMzml(SCANS, scans(), { zlib: true, mzBits: 64, intensityBits: 32, grouped: false })) writeSync(file, piece)
     closeSync(file)
     const person = addTestPerson(laboratory, 'analyst')
     const studyId = addTestStudy(laboratory, person).id

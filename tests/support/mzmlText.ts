@@ -7,4 +7,4 @@ export function writtenScan(scan: Partial<Omit<WrittenScan, 'mz' | 'intensity'>>
 }
 
 /** A small mzML file as text. */
-export const mzmlText = (scans: WrittenScan[], as: Partial<WrittenAs> = {}): string => [...writeMzml(scans.length, scans, { zlib: true, intensityBits: 64, ...as })].join('')
+export const mzmlText = (scans: WrittenScan[], as: Partial<WrittenAs> = {}): string => [...writeMzml(scans.length, scans, { zlib: true, mzBits: 64, intensityBits: 64, grouped: false, ...as })].join('')

@@ -2,7 +2,7 @@ import type { SampleInput } from '../../../shared/schemas/sample'
 import type { DemoCompound } from './compounds'
 import { ionsOf } from './ions'
 import { seededRandom } from './seededRandom'
-import { DEMO_RUN_MINUTES, simulateTable, type Injection, type SimulatedTable } from './simulateTable'
+import { DEMO_RUN_MINUTES, simulateTable, type DemoSignal, type Injection, type SimulatedTable } from './simulateTable'
 
 export interface SimulatedStudy {
   /** Names the study's random numbers. */
@@ -12,6 +12,8 @@ export interface SimulatedStudy {
   compounds: readonly DemoCompound[]
   /** Place in the run at which the mass scale was set right. */
   calibratedAt: number
+  /** Signals that a side's raw data show and no table of it lists: broad humps that no peak picker takes. `share`: of the other side's level. */
+  overlooked?: readonly { compound: string, side: 'A' | 'B', share: number }[]
 }
 
 /** volumeMl × dilution / amount / injectionUl of the injection that levels are stated for. */
@@ -29,6 +31,17 @@ const BEFORE_CALIBRATION_PPM = -3.4
 export function simulateStudy(study: SimulatedStudy): SimulatedTable[] {
   const ions = ionsOf(study.compounds)
   return study.sheet.map(sample => simulateTable(ions, injectionOf(study, sample), seededRandom(`${study.seed} injection ${sample.name}`)))
+}
+
+/** What a sample's raw data show and its table does not list. */
+export function overlookedSignals(study: SimulatedStudy, sample: SampleInput): DemoSignal[] {
+  if (sample.kind !== 'sample') return []
+  const { offsetPpm, driftMinutes } = injectionOf(study, sample)
+  return (study.overlooked ?? []).filter(one => one.side === sample.side).flatMap(({ compound, share }) => {
+    const own = study.compounds.filter(candidate => candidate.name === compound)
+    const level = Math.max(...own.map(({ levelA, levelB }) => sample.side === 'B' ? levelA : levelB)) * share * PLAIN_FACTOR / factorOf(sample)
+    return ionsOf(own).map(ion => ({ mz: ion.mz * (1 + offsetPpm * 1e-6), minutes: ion.retentionMinutes + driftMinutes(ion.retentionMinutes), intensity: level * ion.share }))
+  })
 }
 
 function injectionOf(study: SimulatedStudy, sample: SampleInput): Injection {

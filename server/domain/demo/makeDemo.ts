@@ -9,6 +9,7 @@ import { compareDemoStudy } from './compareDemoStudy'
 import { demoIsWanted, markDemoMade } from './demoProgress'
 import { flagDemoStory } from './flagDemoStory'
 import { sendDemoFiles } from './sendDemoFiles'
+import { sendDemoTraces } from './sendDemoTraces'
 import { startDemoStudy } from './startDemoStudy'
 import { demoStudies, type DemoStudy } from './studies'
 
@@ -34,6 +35,8 @@ export async function makeDemo(place: DemoPlace, tell: (now: string) => void, si
     const studyId = startDemoStudy(db, study, analyst)
     now('Reading the tables of')
     await sendDemoFiles(place, study, studyId, analyst, signal)
+    now('Reading the raw data of')
+    await sendDemoTraces(place, study, studyId, analyst, signal)
     now('Aligning the tables of')
     const alignmentId = await alignDemoStudy(place, study, studyId, analyst, signal)
     now('Comparing the sides of')

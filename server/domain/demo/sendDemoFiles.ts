@@ -1,4 +1,5 @@
 import { and, eq, inArray } from 'drizzle-orm'
+import type { Database } from '../../db/open'
 import { uploads } from '../../db/schema'
 import type { Person } from '../person/person'
 import { acceptUpload } from '../table/acceptUpload'
@@ -25,11 +26,16 @@ export async function sendDemoFiles(place: UploadPlace, study: DemoStudy, studyI
     answerUpload(place, studyId, waiting.id, study.answers, analyst)
     await awaitJobs(place.db, studyId, signal)
   }
-  const left = place.db.select({ fileName: uploads.fileName, remark: uploads.remark }).from(uploads)
+  refuseLeftOut(place.db, studyId)
+}
+
+/** Every file of a demo must be read: one that was not says why. */
+export function refuseLeftOut(db: Database, studyId: string) {
+  const left = db.select({ fileName: uploads.fileName, remark: uploads.remark }).from(uploads)
     .where(and(eq(uploads.studyId, studyId), inArray(uploads.status, ['reading', 'refused']))).get()
   if (left) throw new Error(`${left.fileName} was not read: ${left.remark ?? 'no reason given'}`)
 }
 
-async function* bytesOf(text: string) {
+export async function* bytesOf(text: string) {
   yield Buffer.from(text)
 }

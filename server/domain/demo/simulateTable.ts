@@ -13,12 +13,17 @@ export interface Injection {
   driftMinutes: (retentionMinutes: number) => number
 }
 
+/** One peak as it left the column: its apex in counts, picked or not. */
+export interface DemoSignal { mz: number, minutes: number, intensity: number }
+
 /** A feature table and, for tests, which ion each row is (-1: of no compound). */
 export interface SimulatedTable {
   mz: number[]
   retentionMinutes: number[]
   intensity: number[]
   ion: number[]
+  /** All that the run held, also what lies below the peak limit or was missed: what its raw data show. */
+  signals: DemoSignal[]
 }
 
 export const DEMO_RUN_MINUTES = 15
@@ -33,8 +38,10 @@ const SPLIT = 0.02
 /** One feature table as a peak picker might have written it: scatter, drift, missed and split peaks, bleed, front and noise. */
 export function simulateTable(ions: readonly DemoIon[], injection: Injection, random: SeededRandom): SimulatedTable {
   const rows: [mz: number, minutes: number, intensity: number, ion: number][] = []
+  const signals: DemoSignal[] = []
   const add = (mz: number, minutes: number, intensity: number, ion: number) => {
     const scatter = random.normal(injection.offsetPpm, MASS_SCATTER_PPM)
+    signals.push({ mz: mz * (1 + scatter * 1e-6), minutes: Math.max(0.05, minutes), intensity })
     if (intensity * random.factor(12) < DEMO_PEAK_LIMIT) return
     rows.push([mz * (1 + scatter * 1e-6), Math.max(0.05, minutes), intensity, ion])
   }
@@ -44,6 +51,7 @@ export function simulateTable(ions: readonly DemoIon[], injection: Injection, ra
     const missed = random.chance(MISSED)
     const split = random.chance(SPLIT)
     const apart = random.between(0.03, 0.055)
+    if (counts > 0 && missed) signals.push({ mz: ion.mz * (1 + injection.offsetPpm * 1e-6), minutes, intensity: counts })
     if (counts > 0 && !missed) add(ion.mz, minutes, counts, index)
     if (counts > 0 && !missed && split) add(ion.mz, minutes + apart, counts * 0.3, -1)
   })
@@ -53,5 +61,5 @@ export function simulateTable(ions: readonly DemoIon[], injection: Injection, ra
   for (const mz of frontIons[injection.polarity]) add(mz, random.between(0.52, 0.72), 30_000 * Math.exp(random.normal(0, 0.5)), -1)
   for (let i = 0; i < 36; i++) add(Math.exp(random.normal(5.8, 0.5)), random.between(0.5, DEMO_RUN_MINUTES), 1_100 * Math.exp(random.normal(0, 0.5)), -1)
   rows.sort((a, b) => a[0] - b[0] || a[1] - b[1])
-  return { mz: rows.map(row => row[0]), retentionMinutes: rows.map(row => row[1]), intensity: rows.map(row => row[2]), ion: rows.map(row => row[3]) }
+  return { mz: rows.map(row => row[0]), retentionMinutes: rows.map(row => row[1]), intensity: rows.map(row => row[2]), ion: rows.map(row => row[3]), signals }
 }

@@ -18,6 +18,8 @@ export interface DemoStudy extends SimulatedStudy {
   comparisonTitle: string
   /** What the analyst answers where its files leave something open. */
   answers: LayoutAnswers
+  /** Samples whose raw data are there too. */
+  traced: readonly string[]
   /** What the scientist has flagged. */
   flags: readonly { compound: string, kind: FlagKind, reason: string }[]
 }
@@ -61,6 +63,8 @@ export const demoStudies: readonly [DemoStudy, DemoStudy, DemoStudy] = [
     sheet: juiceSheet,
     compounds: juiceCompounds,
     calibratedAt: 9,
+    overlooked: [{ compound: 'invented 344', side: 'B', share: 0.5 }, { compound: 'invented 342', side: 'B', share: 0.6 }, { compound: 'invented 348', side: 'A', share: 0.6 }],
+    traced: ['Blank-solvent', 'Blank-process', 'QC-3', 'QC-4', 'Millrace-1', 'Millrace-2', 'Millrace-3', 'Tallow-Lane-1', 'Tallow-Lane-2', 'Tallow-Lane-3'],
     fileStyle: 'minutes',
     comparisonTitle: 'Millrace against Tallow Lane',
     answers: {},
@@ -86,6 +90,7 @@ export const demoStudies: readonly [DemoStudy, DemoStudy, DemoStudy] = [
     sheet: laterJuiceSheet,
     compounds: laterBatch(juiceCompounds, seededRandom('juices later batch')),
     calibratedAt: 1,
+    traced: ['Millrace-4', 'Tallow-Lane-4'],
     fileStyle: 'seconds',
     comparisonTitle: 'One bottle against one carton',
     answers: { massKind: 'mz' },
@@ -111,6 +116,7 @@ export const demoStudies: readonly [DemoStudy, DemoStudy, DemoStudy] = [
       ...inventCompounds({ level: 110, between: 24, moreA: 10, moreB: 12, onlyA: 3, onlyB: 5, solvent: 10, process: 10, aboveBlankInA: 2 }, seededRandom('peels invented'), 'positive'),
     ],
     calibratedAt: 1,
+    traced: [],
     fileStyle: 'wide',
     comparisonTitle: 'Grove against market stall',
     answers: { shape: 'wide' },

@@ -2,7 +2,7 @@ import { mountSuspended, registerEndpoint } from '@nuxt/test-utils/runtime'
 import { afterEach, beforeEach, expect, it, vi } from 'vitest'
 import DemoBeingMade from '~/components/study/DemoBeingMade.vue'
 
-const state = { making: true, now: 'Aligning the tables of study 1 of 3', problem: null as string | null, files: [] }
+const state = { making: true, now: 'Aligning the tables of study 1 of 3', problem: null as string | null, files: [], traceFiles: [] }
 registerEndpoint('/api/demo', () => ({ ...state }))
 
 beforeEach(() => vi.useFakeTimers({ toFake: ['setInterval', 'clearInterval'] }))

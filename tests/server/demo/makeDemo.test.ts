@@ -1,6 +1,6 @@
-import { eq } from 'drizzle-orm'
+import { and, eq } from 'drizzle-orm'
 import { afterEach, describe, expect, it } from 'vitest'
-import { alignments, alignmentTables, comparisons, comparisonVersions, flags, layouts, samples, studies, tables, uploads } from '../../../server/db/schema'
+import { alignments, alignmentTables, comparisons, comparisonVersions, flags, layouts, samples, studies, tables, traces, uploads } from '../../../server/db/schema'
 import { makeDemo } from '../../../server/domain/demo/makeDemo'
 import { demoStudies } from '../../../server/domain/demo/studies'
 import { jobKinds } from '../../../server/jobs'
@@ -11,7 +11,7 @@ let laboratory: TestLaboratory
 afterEach(() => laboratory.close())
 
 async function emptyLaboratory() {
-  laboratory = await openTestLaboratory(['read', 'align', 'compare'])
+  laboratory = await openTestLaboratory(['read', 'trace', 'align', 'compare'])
   return { analyst: addTestPerson(laboratory, 'analyst'), scientist: addTestPerson(laboratory, 'scientist') }
 }
 const told: string[] = []
@@ -24,7 +24,8 @@ function standing() {
     title,
     createdBy,
     samples: db.select({ id: samples.id }).from(samples).where(eq(samples.studyId, id)).all().length,
-    uploads: db.select().from(uploads).where(eq(uploads.studyId, id)).all().map(upload => upload.status).join(' '),
+    uploads: db.select().from(uploads).where(and(eq(uploads.studyId, id), eq(uploads.kind, 'table'))).all().map(upload => upload.status).join(' '),
+    traces: db.select({ name: samples.name }).from(traces).innerJoin(samples, eq(samples.id, traces.sampleId)).where(eq(traces.studyId, id)).all().map(row => row.name).sort(),
     tables: db.select().from(tables).where(eq(tables.studyId, id)).all().filter(table => table.sampleId !== null && table.refusedRows === 0).length,
     alignments: db.select({ id: alignments.id }).from(alignments).where(eq(alignments.studyId, id)).all().length,
     comparisons: db.select({ id: comparisons.id }).from(comparisons).where(eq(comparisons.studyId, id)).all().length,
@@ -33,11 +34,12 @@ function standing() {
 }
 
 function expectWhole(analystId: string) {
-  expect(standing()).toEqual(demoStudies.map(({ study, sheet, fileStyle, flags: story }) => ({
+  expect(standing()).toEqual(demoStudies.map(({ study, sheet, fileStyle, traced, flags: story }) => ({
     title: study.title,
     createdBy: analystId,
     samples: sheet.length,
     uploads: (fileStyle === 'wide' ? ['read'] : sheet.map(() => 'read')).join(' '),
+    traces: [...traced].sort(),
     tables: sheet.length,
     alignments: 1,
     comparisons: 1,
@@ -45,7 +47,7 @@ function expectWhole(analystId: string) {
   })))
 }
 
-describe('making the demo laboratory', () => {
+describe('making the demo laboratory', { timeout: 240_000 }, () => {
   it('makes every study whole through uploads and jobs, once', async () => {
     const { analyst } = await emptyLaboratory()
     await make()
@@ -77,9 +79,9 @@ describe('making the demo laboratory', () => {
 
   it('goes on where it was stopped, without doing anything twice', async () => {
     const { analyst } = await emptyLaboratory()
-    for (const part of ['Reading', 'Aligning', 'Comparing']) {
+    for (const part of ['Reading the tables', 'Reading the raw data', 'Aligning', 'Comparing']) {
       const stop = new AbortController()
-      const jobs = new Jobs(laboratory, jobKinds, workerSources(['read', 'align', 'compare']))
+      const jobs = new Jobs(laboratory, jobKinds, workerSources(['read', 'trace', 'align', 'compare']))
       jobs.resume()
       const making = makeDemo({ ...laboratory, jobs }, (now) => {
         if (now.startsWith(part)) setTimeout(() => stop.abort(), 60)
@@ -88,7 +90,7 @@ describe('making the demo laboratory', () => {
       // As a kill would: nothing more is written, jobs are left running.
       await jobs.stop()
     }
-    const jobs = new Jobs(laboratory, jobKinds, workerSources(['read', 'align', 'compare']))
+    const jobs = new Jobs(laboratory, jobKinds, workerSources(['read', 'trace', 'align', 'compare']))
     jobs.resume()
     await make(undefined, jobs)
     await jobs.stop()

@@ -14,7 +14,7 @@ const refusal = async (text: string | Uint8Array, polarity: 'negative' | 'positi
 }
 
 describe('readScans', () => {
-  it.each([{ zlib: true, intensityBits: 64 }, { zlib: false, intensityBits: 32 }, { zlib: true, intensityBits: 32 }, { zlib: false, intensityBits: 64 }] as const)('reads back what was written: %o', async (as) => {
+  it.each([{ zlib: true, intensityBits: 64 }, { zlib: false, intensityBits: 32 }, { zlib: true, intensityBits: 32 }, { zlib: false, intensityBits: 64 }, { grouped: true, zlib: false }] as const)('reads back what was written: %o', async (as) => {
     const scans = [writtenScan({ minutes: 0.5, mz: [100.123456789, 150.5, 999.25], intensity: [1.5, 0, 1e6] }), writtenScan({ minutes: 0.75, mz: [], intensity: [] })]
     const read = await scansOf(mzmlText(scans, as))
     expect(read.map(scan => [scan.minutes, [...scan.mz], [...scan.intensity], scan.profile])).toEqual(scans.map(scan => [scan.minutes, [...scan.mz], [...scan.intensity], false]))
