@@ -22,8 +22,9 @@ export interface LoadingPoints {
 export function loadingPoints(found: SampleComponents, rows: Int32Array, across: number, upwards: number): LoadingPoints {
   const x = along(found.loadings, across, found.features.length)
   const y = along(found.loadings, upwards, found.features.length)
-  const passing = new Set(rows)
-  const kept = Int32Array.from(found.features.keys()).filter(k => passing.has(found.features[k]!))
+  const passing = new Uint8Array(1 + Math.max(found.features.at(-1) ?? 0, rows.reduce((last, feature) => Math.max(last, feature), 0)))
+  for (const feature of rows) passing[feature] = 1
+  const kept = Int32Array.from(found.features.keys()).filter(k => passing[found.features[k]!] === 1)
   return {
     features: kept.map(k => found.features[k]!),
     x: Float64Array.from(kept, k => x[k]!),

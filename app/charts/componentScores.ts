@@ -5,11 +5,12 @@ import type { SideNames } from '#shared/science/verdict/reasonFacts'
 import type { Palette } from '#shared/tokens'
 import { groupLook } from '~/charts/abundanceLook'
 import { chartText } from '~/charts/axis'
-import { along, axisNumber, componentAxis, componentGrid, componentHint, componentTitle, zeroLines } from '~/charts/componentAxis'
+import { along, componentAxis, componentGrid, componentHint, componentTitle, zeroLines } from '~/charts/componentAxis'
 import { samplesByGroup, type ComponentSample } from '~/charts/componentSamples'
 import { markPath } from '~/charts/drawing'
 import { escapeMarkup } from '~/charts/escapeMarkup'
 import { groupLabels, type SampleGroup } from '~/charts/sampleValues'
+import { formatScore } from '~/utils/formatStatistics'
 
 /** One sample on the plot of two components. */
 export interface ScorePoint { name: string, group: SampleGroup, x: number, y: number, filled: number }
@@ -70,7 +71,7 @@ function scoreSeries({ group, samples }: ScoreGroup, palette: Palette, first: bo
   return {
     type: 'scatter', id: `score-${group}`, name: group, z: 3, animation: false, cursor: 'default',
     symbol: `path://${markPath(shape, 5, 5, 5)}`, symbolSize: 11,
-    itemStyle: shape === 'cross' ? { color: 'transparent', borderColor: color, borderWidth: 2 } : { color, borderColor: palette.panel, borderWidth: 1 },
+    itemStyle: shape === 'cross' ? { color: 'transparent', borderColor: color, borderWidth: 2, opacity: 1 } : { color, borderColor: palette.panel, borderWidth: 1, opacity: 1 },
     data: samples.map(({ x, y }) => [x, y]),
     ...(first ? { markLine: zeroLines(palette) } : {}),
   }
@@ -89,7 +90,7 @@ function scoreHint({ name, group, x, y, filled }: ScorePoint, found: SampleCompo
   return [
     name,
     groupLabels(names)[group],
-    `PC${across} ${axisNumber(Number(x.toPrecision(3)))}${upwards > found.rank ? '' : `, PC${upwards} ${axisNumber(Number(y.toPrecision(3)))}`}`,
+    `PC${across} ${formatScore(x)}${upwards > found.rank ? '' : `, PC${upwards} ${formatScore(y)}`}`,
     filled > 0 ? `${filled} of ${found.features.length} values filled in` : 'no value filled in',
   ]
 }

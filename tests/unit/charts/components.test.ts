@@ -70,7 +70,7 @@ describe('the plot of scores', () => {
   it('says the name, the group and what was filled under the pointer, without markup', () => {
     const odd = scoresOption({ found, groups: [{ group: 'A', samples: [{ name: '<b>M1</b>', group: 'A', x: -1.234, y: 2, filled: 3 }], ellipse: null }], across: 1, upwards: 2, names, palette: light, narrow: false })
     const { formatter } = odd.tooltip as { formatter: (mark: object) => string }
-    expect(formatter({ seriesId: 'score-A', dataIndex: 0 })).toBe(`&lt;b&gt;M1&lt;/b&gt;<br>Millrace<br>PC1 −1.23, PC2 2<br>3 of ${found.features.length} values filled in`)
+    expect(formatter({ seriesId: 'score-A', dataIndex: 0 })).toBe(`&lt;b&gt;M1&lt;/b&gt;<br>Millrace<br>PC1 −1.23, PC2 +2<br>3 of ${found.features.length} values filled in`)
     expect(formatter({ seriesId: 'ellipse-A', dataIndex: 0 })).toBe('')
   })
 
