@@ -61,7 +61,7 @@ function heightAxis(points: FoldPoints, { panes: { ratios }, narrow }: FoldFrame
   const common = { ...axis(palette), type: 'value' as const, gridIndex: 0, min: ratios.y[0], max: ratios.y[1], nameTextStyle: { ...text, align: 'left' as const }, nameGap: 14 }
   const isWhole = ratios.interval !== undefined
   if (points.kind === 'certainty') {
-    return { ...common, name: 'certainty, −log10 q', axisLabel: { ...text, ...(isWhole ? {} : endLabels(false)), formatter: (value: number) => value < 0 ? (narrow || !isWhole ? '' : 'no test') : value === MOST_CERTAIN ? (narrow ? '≥ 15' : '15 or more') : minus(value) } }
+    return { ...common, name: narrow ? '−log10 q' : 'certainty, −log10 q', axisLabel: { ...text, ...(isWhole ? {} : endLabels(false)), formatter: (value: number) => value < 0 ? (narrow || !isWhole ? '' : 'no test') : value === MOST_CERTAIN ? (narrow ? '≥ 15' : '15 or more') : minus(value) } }
   }
   return { ...common, name: 'abundance', ...(isWhole ? { interval: 1 } : {}), axisLabel: { ...text, ...(isWhole ? {} : endLabels(false)), formatter: (value: number) => Number.isInteger(value) ? powerOfTen(value) : isWhole ? '' : formatIntensity(10 ** value) } }
 }
@@ -70,7 +70,7 @@ function massAxis({ panes, narrow }: FoldFrame, gridIndex: 1 | 2, palette: Palet
   const { x } = panes[gridIndex === 1 ? 'laneA' : 'laneB']
   const text = chartText(palette)
   return {
-    ...axis(palette), type: 'value', gridIndex, min: x[0], max: x[1], splitNumber: 2, splitLine: { show: false }, axisTick: { show: false },
+    ...axis(palette), type: 'value', gridIndex, min: x[0], max: x[1], splitNumber: 3, splitLine: { show: false }, axisTick: { show: false },
     axisLabel: { ...text, ...endLabels(false), hideOverlap: true, formatter: (value: number) => String(value) }, name: `${narrow ? 'found ' : ''}only in ${gridIndex === 1 ? 'A' : 'B'}, m/z`, nameLocation: 'middle', nameGap: 26, nameTextStyle: { ...text, color: gridIndex === 1 ? palette.sideA : palette.sideB },
   }
 }
