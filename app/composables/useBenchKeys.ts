@@ -6,7 +6,7 @@ export interface BenchKey { key: string, says: string, act: (event: KeyboardEven
 interface BenchKeyring { add: (key: BenchKey) => () => void }
 const keyring: InjectionKey<BenchKeyring> = Symbol('benchKeys')
 
-const typing = 'input, select, textarea, [contenteditable=true], [role=dialog]'
+const typing = 'input, select, textarea, [contenteditable=true], [role=dialog], [role=menu]'
 
 /** Keys that act only while the bench has the focus and nobody is typing. Call in the bench itself. */
 export function useBenchKeys(own: BenchKey[]) {

@@ -58,5 +58,5 @@ export function useFeatureRows({ result, names, foldLimit, masses, flags }: Feat
     const feature = rows.value[row]
     if (feature !== undefined) bench.select(feature)
   }
-  return { rows, passing, selectedRow, step, selectRow, toEdge: (end: boolean) => selectRow(end ? rows.value.length - 1 : 0) }
+  return { rows, passing, selectedRow, step, selectRow }
 }

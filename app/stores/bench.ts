@@ -27,6 +27,14 @@ export const useBenchStore = defineStore('bench', {
       else if (this.picked.includes(feature)) this.picked = this.picked.filter(each => each !== feature)
       else this.picked = [...this.picked, feature].sort((a, b) => a - b).slice(0, MOST_PICKED)
     },
+    /** Looks at the first of these features, with as many of the others picked beside it as may be; gives how many were left out. */
+    pickAll(features: readonly number[]): number {
+      const [first, ...others] = features
+      if (first === undefined) return 0
+      this.selected = first
+      this.picked = others.slice(0, MOST_PICKED).sort((a, b) => a - b)
+      return others.length - this.picked.length
+    },
     toggleVerdict(verdict: Verdict) {
       this.verdicts = this.verdicts.includes(verdict) ? this.verdicts.filter(each => each !== verdict) : [...this.verdicts, verdict]
     },

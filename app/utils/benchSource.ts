@@ -11,7 +11,11 @@ export type BenchVersion = Pick<ComparisonDetail['version'], 'number' | 'sideANa
  * each hand it their own.
  */
 export interface BenchSource {
+  /** What the comparison is called. */
+  title: string
   version: BenchVersion
+  /** What an export made on the page says besides what the version itself tells, as sentences. */
+  exportNotes: () => string[]
   loadVerdicts: () => Promise<VerdictResult>
   /** The intensities, for values per sample and previews; null where they are not to be had. */
   loadData: (() => Promise<ComparisonData>) | null

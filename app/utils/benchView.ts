@@ -5,6 +5,7 @@ import type { FeaturesPresent } from '#shared/science/components/chooseFeatures'
 import type { ComponentScaling } from '#shared/science/components/scaleFeatures'
 import { readArea, writeArea, type PlotArea } from '~/utils/plotArea'
 import { readWindow, writeWindow, type PlotWindow } from '~/utils/plotWindow'
+import { DEFAULT_LAYOUT, readLayout, writeLayout, type ColumnLayout } from '~/utils/columnLayout'
 import { MOST_SORTS, SORT_KEYS, type FeatureSort } from '~/utils/featureOrder'
 import { readFormula, readMass, writeFormula, writeMass, type FormulaTarget, type MassTarget } from '~/utils/massTarget'
 import { OPEN_RANGE, readRange, writeRange, type NumberRange } from '~/utils/numberRange'
@@ -68,6 +69,8 @@ export const viewFields = {
   ...rangeFields(),
   /** Never empty; the first foremost. */
   sort: field<FeatureSort[]>({ initial: [{ key: 'intensity', descending: true }], key: 'sort', isStep: true, read: sortsOf, write: value => value.map(({ key, descending }) => `${descending ? '-' : ''}${key}`).join('.') }),
+  /** Columns of the feature table, from the left. */
+  columns: field<ColumnLayout>({ initial: DEFAULT_LAYOUT, key: 'columns', isStep: false, read: readLayout, write: writeLayout }),
   plot: field<Plot>({ initial: 'fold', key: 'plot', isStep: true, read: text => PLOTS.find(name => name === text), write: value => value }),
   /** The features inside an area drawn on the fold-change plot; null: all. */
   area: field<PlotArea | null>({ initial: null, key: 'area', isStep: true, isFilter: true, read: readArea, write: writeArea }),

@@ -6,7 +6,7 @@ import { stableOrder } from '~/utils/stableOrder'
 /** By what the feature table can be sorted. */
 export const SORT_KEYS = [
   'number', 'mz', 'minutes', 'verdict', 'ratio', 'q', 'reach', 'levelA', 'levelB', 'foundA', 'foundB', 'intensity',
-  'mass', 'low', 'high', 'p', 'equivalenceP', 'method', 'atLeast', 'blankA', 'blankB', 'reason', 'flags',
+  'mass', 'low', 'high', 'p', 'equivalenceP', 'method', 'atLeast', 'traceRatio', 'blankA', 'blankB', 'reason', 'flags',
 ] as const
 export type SortKey = (typeof SORT_KEYS)[number]
 export interface FeatureSort { key: SortKey, descending: boolean }
@@ -60,6 +60,7 @@ export function sortValues(columns: VerdictColumns, key: SortKey, flags = NO_FLA
     case 'p': return columns.p
     case 'equivalenceP': return columns.equivalenceP
     case 'atLeast': return columns.atLeast
+    case 'traceRatio': return columns.traceRatio
     case 'blankA': return columns.blankRatioA
     case 'blankB': return columns.blankRatioB
     case 'method': return Float64Array.from(columns.method, code => code === METHOD.none ? Number.NaN : code)

@@ -2,7 +2,6 @@ import { mountSuspended } from '@nuxt/test-utils/runtime'
 import { beforeEach, describe, expect, it } from 'vitest'
 import BalanceBar from '~/components/comparison/BalanceBar.vue'
 import FeatureCard from '~/components/comparison/FeatureCard.vue'
-import FeatureTable from '~/components/comparison/FeatureTable.vue'
 import SettingsPanel from '~/components/comparison/SettingsPanel.vue'
 import { VERDICT } from '#shared/science/verdict/verdicts'
 import { initialView } from '~/utils/benchView'
@@ -10,7 +9,6 @@ import { manyVerdicts } from '../../support/manyFeatures'
 
 const names = { a: 'Millrace', b: 'Tallow Lane' }
 const many = manyVerdicts(500)
-const rows = Int32Array.from({ length: 500 }, (_, i) => i)
 beforeEach(() => useBenchStore().show(initialView()))
 
 describe('the balance bar', () => {
@@ -27,44 +25,6 @@ describe('the balance bar', () => {
     const before = { ...many.result.counts, onlyA: 1000 }
     const bar = await mountSuspended(BalanceBar, { props: { counts: many.result.counts, before, names, foldLimit: 1 } })
     expect(bar.text()).toContain(`1\u202F000 → ${many.result.counts.onlyA}`)
-  })
-})
-
-describe('the feature table', () => {
-  const props = { result: many.result, rows, selectedRow: -1, foldLimit: 1, names, flags: new Map() }
-
-  it('is a grid that knows how many rows there are, with only those in view', async () => {
-    const table = await mountSuspended(FeatureTable, { props, attachTo: document.body })
-    const grid = table.get('[role=grid]')
-    expect(grid.attributes('aria-rowcount')).toBe('501')
-    expect(table.findAll('[role=row]').length).toBeLessThan(60)
-  })
-
-  it('sorts by a column, and the other way round the second time', async () => {
-    const table = await mountSuspended(FeatureTable, { props })
-    const header = table.findAll('[role=columnheader]').find(cell => cell.text() === 'm/z')
-    await header?.get('button').trigger('click')
-    expect(header?.attributes('aria-sort')).toBe('ascending')
-    await header?.get('button').trigger('click')
-    expect(useBenchStore().sort).toEqual([{ key: 'mz', descending: true }])
-  })
-
-  it('sorts by a further column with Shift, and shows the place of each', async () => {
-    const table = await mountSuspended(FeatureTable, { props })
-    const header = (label: string) => table.findAll('[role=columnheader]').find(cell => cell.text().startsWith(label))
-    await header('reach')?.get('button').trigger('click')
-    await header('min')?.get('button').trigger('click', { shiftKey: true })
-    expect(useBenchStore().sort).toEqual([{ key: 'reach', descending: true }, { key: 'minutes', descending: false }])
-    expect([header('reach')?.text(), header('min')?.text()]).toEqual(['reach ↓1', 'min ↑2'])
-    expect(header('min')?.attributes('aria-sort')).toBeUndefined()
-  })
-
-  it('steps by keys', async () => {
-    const table = await mountSuspended(FeatureTable, { props })
-    const grid = table.get('[role=grid]')
-    for (const key of ['ArrowDown', 'ArrowUp', 'End', 'Home']) await grid.trigger('keydown', { key })
-    expect(table.emitted('step')).toEqual([[1], [-1]])
-    expect(table.emitted('edge')).toEqual([[true], [false]])
   })
 })
 

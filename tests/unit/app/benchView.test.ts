@@ -3,6 +3,7 @@ import { describe, expect, it } from 'vitest'
 import { ABUNDANCE_LAYOUTS, initialView, isFilteredView, PLOTS, queryToView, SIGNALS, stepsOf, viewFields, viewToQuery, withoutFilter, type BenchView } from '../../../app/utils/benchView'
 import { FURTHER_GROUPS } from '../../../app/utils/componentsView'
 import { AREA_PANES, MOST_CORNERS } from '../../../app/utils/plotArea'
+import { ALWAYS_SHOWN, COLUMN_IDS } from '../../../app/utils/columnLayout'
 import { MOST_SORTS, SORT_KEYS } from '../../../app/utils/featureOrder'
 import { OPEN_RANGE } from '../../../app/utils/numberRange'
 import { COMPONENT_SCALINGS } from '../../../shared/science/components/scaleFeatures'
@@ -30,6 +31,10 @@ const view: fc.Arbitrary<BenchView> = fc.record({
   formula: fc.option(fc.record({ formula: fc.constantFrom('C21H24O10', 'C6 H12 O6', 'C2H4(OH)2'), ppm }), { nil: null }),
   mzRange: range, minutes: range, ratio: range, fold: range, q: range, reach: range, intensity: range,
   sort: fc.uniqueArray(fc.record({ key: fc.constantFrom(...SORT_KEYS), descending: fc.boolean() }), { minLength: 1, maxLength: MOST_SORTS, selector: each => each.key }),
+  columns: fc.tuple(fc.shuffledSubarray(COLUMN_IDS.filter(id => id !== ALWAYS_SHOWN)), fc.nat(10), fc.nat(10)).map(([others, place, frozen]) => {
+    const shown = others.toSpliced(Math.min(place, others.length), 0, ALWAYS_SHOWN)
+    return { shown, frozen: Math.min(frozen, shown.length) }
+  }),
   plot: fc.constantFrom(...PLOTS),
   area: fc.option(fc.record({ pane: fc.constantFrom(...AREA_PANES), corners: fc.array(fc.tuple(decimals(4, 2000), decimals(4, 2000)), { minLength: 3, maxLength: MOST_CORNERS }) }), { nil: null }),
   foldWindow: fc.option(fc.record({ x: ends, y: ends }), { nil: null }),
