@@ -51,7 +51,7 @@ describe('the feature table', () => {
 
   it('keeps a person\'s columns in the browser', () => onBench('', async (page) => {
     await page.getByText('Columns', { exact: true }).click()
-    await page.getByLabel('p of equivalence').check()
+    await page.getByRole('checkbox', { name: 'p of equivalence' }).click()
     await expect.poll(() => heads(page)).toContain('p equiv.')
     await expect.poll(() => queryOf(page).columns).toContain('~')
     await page.goto(server.url + study.path)

@@ -144,7 +144,7 @@ describe('the menu of a column', () => {
     const column = all.find(({ id }) => id === 'minutes') ?? null
     const anchor = document.body.appendChild(document.createElement('span'))
     const choose = async (says: string) => {
-      const menu = await mountSuspended(ColumnMenu, { props: { column, anchor } })
+      const menu = await mountSuspended(ColumnMenu, { props: { column, anchor }, attachTo: document.body })
       await expect.poll(() => [...document.querySelectorAll('[role=menuitem]')].some(item => item.textContent === says)).toBe(true)
       const item = [...document.querySelectorAll<HTMLElement>('[role=menuitem]')].find(each => each.textContent === says)
       item?.click()
@@ -170,6 +170,7 @@ describe('the choice of columns', () => {
     const box = (title: string) => choice.findAll('label').find(label => label.text() === title)?.get('input')
     await box('p of equivalence')?.setValue(true)
     expect(bench().columns.shown.at(-1)).toBe('equivalenceP')
+    expect(document.activeElement).toBe(box('p of equivalence')?.element)
     await box('reason')?.setValue(false)
     expect(bench().columns.shown).not.toContain('reason')
     await choice.get('[aria-label="verdict: to the left"]').trigger('click')
