@@ -9,6 +9,7 @@ import { benchComponents } from './components'
 import { benchFrames } from './frames'
 import { benchLaboratory } from './laboratory'
 import { secondsOfSort } from './measure'
+import { benchTraceMaxima } from './traceMaxima'
 
 const built = existsSync(fileURLToPath(new URL('../../.output/server/index.mjs', import.meta.url)))
 
@@ -19,6 +20,7 @@ const needsBuild = 'Not built yet: run `npm run build` first.'
 const parts: Record<string, { title: string, bench: () => Promise<void> | void }> = {
   alignment: { title: 'The alignment alone, processor time', bench: () => benchAlignment(yardstick()) },
   components: { title: 'Principal components, from intensities to scores and loadings, by the clock', bench: benchComponents },
+  traceMaxima: { title: 'The highest signal of each aligned feature in one trace, processor time', bench: benchTraceMaxima },
   laboratory: { title: 'In the built server, from files to a stored alignment, by the clock', bench: () => built ? benchLaboratory(yardstick()) : console.log(needsBuild) },
   frames: { title: 'The bench in Chromium: JavaScript as sent, and frame times by its tracing', bench: () => built ? benchFrames() : console.log(needsBuild) },
 }

@@ -8,7 +8,7 @@ import { record } from '../activity/record'
 import { notFound } from '../DomainError'
 import { touchStudy } from '../study/touchStudy'
 import type { CompareInput } from './compareInput'
-import { keepTraceMaxima, type TraceMaxima } from '../trace/traceMaxima'
+import { keepTraceMaxima, requireTraceMaxima, type TraceMaxima } from '../trace/traceMaxima'
 import { readSamples, storeSample } from './storedSample'
 import { versionDifferences } from './versionDifferences'
 
@@ -30,6 +30,7 @@ export function keepVersion(db: Database, studyId: string, input: CompareInput, 
   if (!alignment) throw notFound()
   const { alignmentId, sideAName, sideBName, settings, traces = [] } = input
   keepTraceMaxima(db, alignmentId, result.maxima ?? [])
+  requireTraceMaxima(db, alignmentId, traces)
   const content = { alignmentId, alignmentNumber: alignment.number, sideAName, sideBName, settings, samples: result.samples, traces, engineVersion: ENGINE_VERSION }
   const number = (before?.comparison_versions.number ?? 0) + 1
   db.insert(comparisonVersions).values({

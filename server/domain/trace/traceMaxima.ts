@@ -1,4 +1,4 @@
-import { and, eq, inArray } from 'drizzle-orm'
+import { and, count, eq, inArray } from 'drizzle-orm'
 import type { UsedTrace } from '../../../shared/types/trace'
 import type { Database } from '../../db/open'
 import { packFloat64, unpackFloat64 } from '../../db/packed'
@@ -26,6 +26,16 @@ export function keepTraceMaxima(db: Database, alignmentId: string, found: readon
     if (!db.select({ id: traces.id }).from(traces).where(eq(traces.id, traceId)).get()) throw traceGone()
     db.insert(traceMaxima).values({ alignmentId, traceId, maxima: packFloat64(maxima) }).onConflictDoNothing().run()
   }
+}
+
+/**
+ * What a version rests on must be there when it is kept: these traces, and what was found in them on its alignment.
+ * @throws DomainError where a trace was taken off meanwhile
+ */
+export function requireTraceMaxima(db: Database, alignmentId: string, used: readonly UsedTrace[]) {
+  const traceIds = used.map(({ traceId }) => traceId)
+  const kept = db.select({ kept: count() }).from(traceMaxima).where(and(eq(traceMaxima.alignmentId, alignmentId), inArray(traceMaxima.traceId, traceIds))).get()?.kept
+  if (kept !== traceIds.length) throw traceGone()
 }
 
 export const traceGone = () => new DomainError('conflict', 'A trace that was to be looked into was taken off meanwhile. Start again: it takes the traces that stand then.')

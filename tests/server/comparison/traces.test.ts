@@ -4,17 +4,20 @@ import { gunzipSync } from 'node:zlib'
 import { and, eq } from 'drizzle-orm'
 import { afterEach, beforeEach, describe, expect, it } from 'vitest'
 import { packFloat64, unpackFloat64 } from '../../../server/db/packed'
-import { alignmentTables, comparisonVersions, jobs, traceMaxima, traces } from '../../../server/db/schema'
+import { alignmentTables, comparisons, comparisonVersions, jobs, traceMaxima, traces } from '../../../server/db/schema'
 import type { CompareInput } from '../../../server/domain/comparison/compareInput'
 import { readComparisonData } from '../../../server/domain/comparison/comparisonData'
 import { prepareComparison, prepareVersion } from '../../../server/domain/comparison/prepareComparison'
 import { readComparison } from '../../../server/domain/comparison/readComparison'
 import { versionColumns } from '../../../server/domain/comparison/readVersion'
 import { verdictCsv } from '../../../server/domain/comparison/verdictCsv'
+import { keepVersion } from '../../../server/domain/comparison/keepVersion'
+import { readSamples } from '../../../server/domain/comparison/storedSample'
 import type { Person } from '../../../server/domain/person/person'
 import { sharedData } from '../../../server/domain/share/sharedData'
 import type { VisibleStudy } from '../../../server/domain/study/findVisibleStudy'
 import { standingTraces, usedTraces } from '../../../server/domain/trace/alignedTraces'
+import type { TraceMaxima } from '../../../server/domain/trace/traceMaxima'
 import { removeTrace } from '../../../server/domain/trace/removeTrace'
 import { unpackComparisonData } from '../../../shared/formats/comparisonData'
 import { packVerdicts, unpackVerdicts } from '../../../shared/formats/verdictColumns'
@@ -24,6 +27,7 @@ import { reasonSentence } from '../../../shared/science/verdict/reasonSentence'
 import { REASONS } from '../../../shared/science/verdict/reasons'
 import { comparisonDefaults } from '../../../shared/science/verdict/settings'
 import { summariseSides } from '../../../shared/science/verdict/summariseSides'
+import { VERDICTS, type Verdict } from '../../../shared/science/verdict/verdicts'
 import { addComparedAlignment } from '../../support/comparedAlignment'
 import { none } from '../../support/comparisonInput'
 import { addTestPerson, addTestStudy, openTestLaboratory, type TestLaboratory } from '../../support/laboratory'
@@ -85,6 +89,8 @@ const read = (id: string, number?: number, person = analyst) => readComparison(l
 const result = (id: string, number?: number, person = analyst) => unpackVerdicts(gunzipSync(versionColumns(laboratory.db, read(id, number, person).id)))
 const reasons = (id: string, number?: number, person = analyst) => [...result(id, number, person).columns.reason].map(code => REASONS[code])
 const maximaKept = () => laboratory.db.select({ traceId: traceMaxima.traceId, maxima: traceMaxima.maxima }).from(traceMaxima).where(eq(traceMaxima.alignmentId, alignmentId)).all()
+
+const emptyCounts = Object.fromEntries(VERDICTS.map(name => [name, 0])) as Record<Verdict, number>
 
 const withTraces = ['levelAssumed', 'signalInTrace', 'foundOnly', 'foundOnly']
 const withoutTraces = ['levelAssumed', 'foundOnly', 'foundOnly', 'foundOnly']
@@ -238,6 +244,19 @@ describe('a trace that is taken off', () => {
     remove('b1.mzML')
     const ended = await end(start(input))
     expect([ended.status, ended.message]).toEqual(['failed', 'A trace that was to be looked into was taken off meanwhile. Start again: it takes the traces that stand then.'])
+    expect(laboratory.db.select().from(comparisonVersions).all()).toEqual([])
+  })
+
+  it('while a comparison looks into it, or uses what was found before: neither is kept', async () => {
+    await both()
+    await create({ practice: true }, student)
+    const input = newComparison()
+    // A practice copy that used it is deleted: nothing holds the trace then.
+    laboratory.db.delete(comparisons).run()
+    remove('b1.mzML')
+    const finish = (maxima: TraceMaxima[]) => () => keepVersion(laboratory.db, study.id, input, { samples: readSamples(input.samples), counts: emptyCounts, cautions: [], columns: new Uint8Array(0), maxima }, analyst.id)
+    expect(finish([])).toThrow('was taken off meanwhile')
+    expect(finish([{ traceId: input.traces?.[1]?.traceId ?? '', maxima: new Float64Array(4) }])).toThrow('was taken off meanwhile')
     expect(laboratory.db.select().from(comparisonVersions).all()).toEqual([])
   })
 
