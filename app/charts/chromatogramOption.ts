@@ -86,12 +86,12 @@ function pointsOf({ side, minutes, values }: Curve, [fromMinutes, toMinutes]: Ti
   return { data, highest }
 }
 
-/** Up to a whole number of steps of the axis, two to five to each side, with room for labels above the highest point. */
+/** Up to a whole number of steps of the axis, three to six to each side, with room for labels above the highest point. */
 function valueRange(top: number): { highest: number, step: number } {
   if (!(top > 0)) return { highest: 1, step: 0.5 }
   const needed = top * 1.2
-  const power = 10 ** Math.floor(Math.log10(needed / 2))
-  const step = ([5, 2, 1].find(each => each * power <= needed / 2) ?? 1) * power
+  const power = 10 ** Math.floor(Math.log10(needed / 2.5))
+  const step = ([5, 2, 1].find(each => each * power <= needed / 2.5) ?? 1) * power
   return { highest: Math.ceil(needed / step) * step, step }
 }
 
@@ -125,14 +125,20 @@ function middleLine({ palette, window, divertWindows }: ChromatogramInput): Line
   }
 }
 
-const SYMBOL = { selected: 'circle', picked: 'emptyCircle', flagged: 'diamond' } as const
+const SYMBOL = { selected: 'circle', picked: 'circle', flagged: 'diamond' } as const
+
+/** Selected: full; looked at beside it: a ring; flagged: in ink. */
+function markStyle(why: PeakMark['why'], palette: Palette) {
+  if (why === 'picked') return { color: palette.panel, borderColor: palette.focus, borderWidth: 2 }
+  return { color: why === 'flagged' ? palette.ink : palette.focus, borderColor: palette.panel, borderWidth: 1 }
+}
 
 function markSeries(labels: readonly LabelledMark[], palette: Palette): ScatterSeriesOption {
   return {
     type: 'scatter', id: 'marks', silent: true, animation: false, z: 6,
     data: labels.map(({ side, minutes, height, why, text, lift }) => ({
       value: [minutes, side === 'A' ? height : -height], name: text, symbol: SYMBOL[why], symbolSize: why === 'flagged' ? 9 : 7,
-      itemStyle: { color: why === 'flagged' ? palette.ink : palette.focus, borderColor: palette.panel, borderWidth: why === 'picked' ? 0 : 1 },
+      itemStyle: markStyle(why, palette),
       label: { show: true, position: side === 'A' ? 'top' as const : 'bottom' as const, distance: 5 + lift, formatter: text, color: why === 'selected' ? palette.focus : palette.ink, fontWeight: why === 'selected' ? 'bold' as const : 'normal' as const, fontSize: 12, fontFamily: chartText(palette).fontFamily, textBorderColor: palette.panel, textBorderWidth: 3 },
     })),
   }

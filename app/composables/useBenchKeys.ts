@@ -25,9 +25,7 @@ export function useBenchKeys(own: BenchKey[]) {
     event.preventDefault()
     found.act(event)
   }
-  // Two parts may answer to one key, where both stand by the same truth; the first acts, and help names the key once.
-  const shown = computed(() => keys.value.filter((each, at) => keys.value.findIndex(other => other.key === each.key) === at))
-  return { keys: shown, onKey }
+  return { keys, onKey }
 }
 
 /** For what stands inside the bench: adds a key while it is shown. Outside a bench nothing happens. */

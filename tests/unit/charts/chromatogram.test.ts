@@ -32,8 +32,8 @@ describe('the mirrored chromatogram', () => {
 
   it('gives both sides the same height, with room above the highest peak', () => {
     const { yAxis } = chromatogramOption(input)
-    expect(yAxis).toMatchObject({ min: -1500, max: 1500, interval: 500 })
-    expect(chromatogramOption({ ...input, window: [10, 14] }).yAxis).toMatchObject({ min: -600, interval: 200 })
+    expect(yAxis).toMatchObject({ min: -1200, max: 1200, interval: 200 })
+    expect(chromatogramOption({ ...input, window: [10, 14] }).yAxis).toMatchObject({ min: -500, interval: 100 })
   })
 
   it('draws few points of many and loses no top, at each zoom', () => {
