@@ -4,8 +4,9 @@ export interface Problem { message: string, issues: { field: string, sentence: s
 
 /** What a failed request says to the person: its sentence, and the fields it concerns. */
 export function toProblem(error: unknown): Problem {
-  if (error instanceof FetchError) {
-    const body: unknown = error.data
+  // useFetch hands on the server's answer in an error of its own.
+  if (error instanceof FetchError || field(error, '__nuxt_error') === true) {
+    const body = field(error, 'data')
     const message = field(body, 'message')
     const issues = field(field(body, 'data'), 'issues')
     return {
