@@ -19,7 +19,7 @@ export default defineConfig({
       plain('unit'),
       plain('reference'),
       plain('server'),
-      await defineVitestProject({ test: { name: 'nuxt', include: ['tests/nuxt/**/*.test.ts'], environment: 'nuxt', retry, testTimeout: 60_000 } }),
+      await defineVitestProject({ test: { name: 'nuxt', include: ['tests/nuxt/**/*.test.ts'], environment: 'nuxt', retry, testTimeout: 60_000, hookTimeout: 60_000 } }),
       plain('browser', { include: ['tests/e2e/**/*.test.ts'], fileParallelism: false, testTimeout: 240_000, hookTimeout: 240_000 }),
     ],
   },

@@ -25,7 +25,7 @@ function sourceWith(rest: Partial<BenchSource>): BenchSource {
   const version: BenchSource['version'] = {
     number: 1, sideAName: names.a, sideBName: names.b, counts, cautions, settings: many.settings, samples: [...many.input.samples], engineVersion: '1', polarity: 'negative', massKind: 'mz',
   }
-  return { version, loadVerdicts: async () => many.result, loadData: null, loadTraces: null, loadExtracted: null, ...rest }
+  return { title: 'Apple juices', version, exportNotes: () => [], loadVerdicts: async () => many.result, loadData: null, loadTraces: null, loadExtracted: null, ...rest }
 }
 const mountWith = (rest: Partial<BenchSource> = {}, data: typeof many.input | null = many.input) =>
   mountSuspended(MirroredChromatogram, { props: { source: sourceWith(rest), result: many.result, data, rows, settings: many.settings, names, flagged: new Set([3]) } })

@@ -14,6 +14,8 @@ const source: BenchSource = {
   exportNotes: () => [],
   loadVerdicts: () => Promise.resolve(many.result),
   loadData: null,
+  loadTraces: null,
+  loadExtracted: null,
 }
 const mountSection = (csvAddress: string | null = '/verdicts.csv') => mountSuspended(FeatureSection, {
   props: { source, capabilities: { save: false, csvAddress }, result: many.result, isPreview: false, rows, total: 300, selectedRow: -1, settings: many.settings, names, flags: new Map(), cautions: ['Few replicates.'] },
