@@ -12,13 +12,16 @@ import { comparisonDefaults, type ComparisonSettings } from '../../shared/scienc
 import { summariseSides } from '../../shared/science/verdict/summariseSides'
 import type { UsedTrace } from '../../shared/types/trace'
 
-/** A comparison with one version, judged and kept without a job; of an alignment made by addComparedAlignment. Gives its id. */
+/** A comparison with one version, judged and kept without a job; of an alignment made by addComparedAlignment. Its `traces` cover no feature. Gives its id. */
 export function addKeptComparison({ db }: Pick<OpenDatabase, 'db'>, studyId: string, createdBy: string, alignmentId: string, { practice = false, title = 'Millrace against Tallow Lane', settings = {} as Partial<ComparisonSettings>, comparisonId = null as string | null, traces = [] as UsedTrace[] } = {}) {
   const all = { ...comparisonDefaults, ...settings }
   const samples = snapshotSamples(db, alignmentId).map(sample => ({ ...sample, floor: Number.isNaN(sample.floor) ? 10 : sample.floor }))
-  const result = decideVerdicts(summariseSides({ ...alignmentData(db, alignmentId), samples, normaliseByAmount: all.normaliseByAmount }), all)
+  const data = alignmentData(db, alignmentId)
+  const notCovered = new Float64Array(data.mz.length).fill(Number.NaN)
+  const traceMaxima = samples.map((_, position) => traces.some(trace => trace.position === position) ? notCovered : null)
+  const result = decideVerdicts(summariseSides({ ...data, samples, traceMaxima, normaliseByAmount: all.normaliseByAmount }), all)
   return keepVersion(db, studyId, { comparisonId, title, practice, alignmentId, sideAName: 'Millrace', sideBName: 'Tallow Lane', settings: all, samples: samples.map(storeSample), traces },
-    { samples, counts: result.counts, cautions: result.cautions, columns: gzipSync(packVerdicts(result)) }, createdBy)
+    { samples, counts: result.counts, cautions: result.cautions, columns: gzipSync(packVerdicts(result)), maxima: traces.map(({ traceId }) => ({ traceId, maxima: notCovered })) }, createdBy)
 }
 
 /** The id of a version by its number. */
