@@ -19,7 +19,7 @@ const table: AlignedTable = {
   landmarks: 320, reason: 'Offset taken out; drift corrected.', drift: [[1, 0.02]], residualMedianPpm: 0.84, residualMedianMinutes: 0.0123,
 }
 const line: AlignmentLine = {
-  id: 'a1', number: 1, practice: false, asGiven: false, settings: alignmentDefaults, differs: [], groups: 14_000, tables: 2, comparisons: 1, createdByName: 'Eve Lark', createdAt: '2026-02-03T09:30:00.000Z',
+  id: 'a1', number: 1, practice: false, asGiven: false, settings: alignmentDefaults, differs: [], groups: 14_000, tables: 2, comparisons: 1, createdByName: 'Eve Lark', createdAt: '2026-02-03T11:30:00.000Z',
 }
 const lone = { ...table, tableId: 't2', sampleName: 'M2', matched: 0, offsetPpm: 0, residualMedianPpm: null, residualMedianMinutes: null }
 const detail: AlignmentDetail = { ...line, engineVersion: '3', reference: 0, groupSizes: [5000, 9000], aligned: [table, lone] }

@@ -24,14 +24,14 @@ import { refusal } from './mountCase'
 const counts = judged.result.counts
 const sample = (name: string, side: 'A' | 'B' | null): SampleRow => ({ ...sampleSchema.parse({ name, side }), id: name, tables: 1, aligned: true, writtenBy: {} })
 const samples = [sample('M1', 'A'), sample('T1', 'B')]
-const alignment: AlignmentLine = { id: 'a1', number: 1, practice: false, asGiven: false, settings: alignmentDefaults, differs: [], groups: 14_000, tables: 6, comparisons: 0, createdByName: 'Eve Lark', createdAt: '2026-02-03T09:30:00.000Z' }
+const alignment: AlignmentLine = { id: 'a1', number: 1, practice: false, asGiven: false, settings: alignmentDefaults, differs: [], groups: 14_000, tables: 6, comparisons: 0, createdByName: 'Eve Lark', createdAt: '2026-02-03T11:30:00.000Z' }
 const LIST = '/api/studies/s1/comparisons'
 const toCompare = { '/api/studies/s1/alignments': { alignments: [alignment, { ...alignment, id: 'a2', number: 2, practice: true }], ready: { tables: [], withoutSample: [], problem: null }, jobs: [] }, '/api/studies/s1/samples': { samples } }
 const job = { id: 'j1', kind: 'compare', progress: 1, message: '' }
 const inBench = { studyId: 's1', address: `${LIST}/c1`, saving: false, problem: '' }
 const benchAnswers = {
   [`${LIST}/c1/data`]: packVerdicts(judged.result), [`${LIST}/c1/input`]: packComparisonData(judged.input), [`${LIST}/c1/traces`]: packSampleTraces([]),
-  '/api/studies/s1/alignments/a1/flags': { flags: [{ id: 'f1', featureIndex: 4, kind: 'artefact', reason: 'odd', by: 'Eve Lark', at: '2026-02-03T09:30:00.000Z' }], mayFlag: true },
+  '/api/studies/s1/alignments/a1/flags': { flags: [{ id: 'f1', featureIndex: 4, kind: 'artefact', reason: 'odd', by: 'Eve Lark', at: '2026-02-03T11:30:00.000Z' }], mayFlag: true },
 }
 
 export const comparisonRows: ComponentRows = {

@@ -11,7 +11,7 @@ import type { FlaggedFeature, FlagLine } from '#shared/types/flag'
 import { holds, type ComponentRows } from './componentCase'
 import { refusal } from './mountCase'
 
-const flag: FlagLine = { id: 'f1', featureIndex: 4, kind: 'contaminant', reason: 'plasticiser', by: 'Eve Lark', at: '2026-02-03T09:30:00.000Z' }
+const flag: FlagLine = { id: 'f1', featureIndex: 4, kind: 'contaminant', reason: 'plasticiser', by: 'Eve Lark', at: '2026-02-03T11:30:00.000Z' }
 const ADDRESS = '/api/studies/s1/alignments/a1/flags'
 const place = { studyId: 's1', alignmentId: 'a1' }
 const flags = { flags: [flag], mayFlag: true }

@@ -5,7 +5,7 @@ import { manyVerdicts } from '../../support/manyFeatures'
 /** Sixty judged features of every kind, with the intensities they rest on. */
 export const judged = manyVerdicts(60)
 export const sideNames = { a: 'Millrace', b: 'Tallow Lane' }
-const AT = '2026-02-03T09:30:00.000Z'
+const AT = '2026-02-03T11:30:00.000Z'
 
 export const inventedVersionLine: VersionLine = {
   number: 2, alignmentId: 'a1', alignmentNumber: 1, sideAName: sideNames.a, sideBName: sideNames.b, counts: judged.result.counts,

@@ -1,6 +1,6 @@
 import type { MethodListItem, StudyView } from '#shared/types/study'
 
-const AT = '2026-02-03T09:30:00.000Z'
+const AT = '2026-02-03T11:30:00.000Z'
 
 export const inventedMethod: MethodListItem = {
   id: 'm1', name: 'RP 15 min', column: 'C18, 100 mm', gradient: '5 to 95 % in 12 min', polarity: 'negative', voidMinutes: 0.8,

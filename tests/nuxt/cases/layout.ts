@@ -21,7 +21,7 @@ const basis = { survey, answers: {}, remembered: false }
 const inUpload = { studyId: 's1', uploadId: 'u1' }
 
 export const waitingDetail: UploadDetail = {
-  id: 'u1', fileName: 'odd.txt', bytes: 900, status: 'waiting', remark: null, jobId: null, progress: null, fingerprint: 'f', open: ['timeUnit'], createdAt: '2026-02-03T09:30:00.000Z', expiresAt: null, basis, tables: 0,
+  id: 'u1', fileName: 'odd.txt', bytes: 900, status: 'waiting', remark: null, jobId: null, progress: null, fingerprint: 'f', open: ['timeUnit'], createdAt: '2026-02-03T11:30:00.000Z', expiresAt: null, basis, tables: 0,
 }
 const question = { field: 'timeUnit' as const, sentence: 'Are times minutes?', choices: [{ value: 'minutes', label: 'minutes' }, { value: 'seconds', label: 'seconds' }], confirm: false }
 

@@ -15,7 +15,7 @@ import { refusal } from './mountCase'
 
 const ENDS = '2026-03-01T10:00:00.000Z'
 const shared = { ...inventedVersion, title: 'Millrace against Tallow Lane', alignMassPpm: 10, endsAt: ENDS, mayExport: true }
-const link = { id: 'l1', label: 'the miller', allowExport: false, by: 'Eve Lark', at: '2026-02-03T10:00:00.000Z', comparisonId: 'c1', comparisonTitle: 'Millrace against Tallow Lane', versionId: 'v1', versionNumber: 2, endsAt: ENDS, withdrawnAt: null, state: 'inForce' as const }
+const link = { id: 'l1', label: 'the miller', allowExport: false, by: 'Eve Lark', at: '2026-02-03T11:30:00.000Z', comparisonId: 'c1', comparisonTitle: 'Millrace against Tallow Lane', versionId: 'v1', versionNumber: 2, endsAt: ENDS, withdrawnAt: null, state: 'inForce' as const }
 const made = { secret: 'abc', endsAt: ENDS }
 
 export const shareRows: ComponentRows = {
@@ -51,7 +51,7 @@ export const shareRows: ComponentRows = {
       expect(text()).toContain('not noted')
       expect(text()).toContain('withdrawn')
       expect(document.querySelector('td a')?.getAttribute('href')).toBe('/studies/s1/comparisons/c1?version=2')
-      await press(/^Withdraw\s?the link for the miller$/)
+      await press(/^Withdraw\s?access for the miller$/)
       await until(() => expect(find('[role=dialog]').text()).toContain('The address stops working at once'))
       await press('Withdraw the link')
       expect(emitted('withdraw')).toEqual([['l1']])

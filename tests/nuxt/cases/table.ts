@@ -17,13 +17,13 @@ import { refusal } from './mountCase'
 
 const table: TableLine = {
   id: 't1', uploadId: 'u1', fileName: 'm1.csv', columnName: null, wideGroup: null, sampleId: 'x1', sampleName: 'M1', features: 12_345, refusedRows: 2, measure: 'area', timeUnit: 'minutes',
-  massKind: 'mz', bytes: 2_000_000, digest: 'a'.repeat(64), gapFilled: false, statedFloor: null, remark: null, createdAt: '2026-02-03T09:30:00.000Z', createdByName: 'Eve Lark', alignments: 0, replacedAt: null, replacedByFile: null,
+  massKind: 'mz', bytes: 2_000_000, digest: 'a'.repeat(64), gapFilled: false, statedFloor: null, remark: null, createdAt: '2026-02-03T11:30:00.000Z', createdByName: 'Eve Lark', alignments: 0, replacedAt: null, replacedByFile: null,
 }
 const replaced: TableLine = { ...table, id: 't0', alignments: 2, replacedAt: '2026-02-04T09:30:00.000Z', replacedByFile: 'm1b.csv' }
 const samples = [{ id: 'x1', name: 'M1' }, { id: 'x2', name: 'M2' }, { id: 'x3', name: 'T1' }]
 const rights = { mayEdit: true, mayExport: true }
 const inStudy = { studyId: 's1', samples, taken: new Set(['x1', 'x3']) }
-const upload: UploadLine = { id: 'u9', fileName: 'odd.txt', bytes: 900, status: 'reading', remark: null, jobId: 'j1', progress: { share: 0.25, message: 'Reading rows' }, fingerprint: 'f', open: [], createdAt: '2026-02-03T09:30:00.000Z', expiresAt: null }
+const upload: UploadLine = { id: 'u9', fileName: 'odd.txt', bytes: 900, status: 'reading', remark: null, jobId: 'j1', progress: { share: 0.25, message: 'Reading rows' }, fingerprint: 'f', open: [], createdAt: '2026-02-03T11:30:00.000Z', expiresAt: null }
 const waiting: UploadLine = { ...upload, status: 'waiting', progress: null, open: ['timeUnit'], expiresAt: '2026-02-10T09:30:00.000Z' }
 const sending: Sending = { key: 1, name: 'm1.csv', bytes: 4096, sent: 1024, state: 'sending', sentence: '' }
 const file = new File(['x'], 'new.csv')

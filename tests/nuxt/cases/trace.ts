@@ -6,7 +6,7 @@ import { refusal } from './mountCase'
 
 const trace: TraceLine = {
   id: 'r1', fileName: 'm1.mzML', sampleId: 'x1', sampleName: 'M1', bytes: 4e7, keptBytes: 9e6, polarity: 'negative', profile: false, scans: 1800, centroids: 1_200_000, intensityLimit: 500,
-  lowestMz: 70.01, highestMz: 1049.9, remark: 'Its times were in seconds.', createdAt: '2026-02-03T09:30:00.000Z', createdByName: 'Eve Lark', versions: 0, replacedAt: null,
+  lowestMz: 70.01, highestMz: 1049.9, remark: 'Its times were in seconds.', createdAt: '2026-02-03T11:30:00.000Z', createdByName: 'Eve Lark', versions: 0, replacedAt: null,
 }
 const inStudy = { studyId: 's1', samples: [{ id: 'x1', name: 'M1' }], taken: new Set(['x1']) }
 
