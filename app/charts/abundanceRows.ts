@@ -2,7 +2,8 @@ import { ESTIMATED_DASH, groupLook, legend, MARK_SIZE, sampleSays } from '~/char
 import { fitText, round, textWidth, type Drawing, type DrawnShape } from '~/charts/drawing'
 import { logScale, type LogScale } from '~/charts/logScale'
 import { groupLabels, isFound, type SampleGroup, type SampleValue } from '~/charts/sampleValues'
-import type { SideMean, Signal } from '~/charts/sideMeans'
+import type { SideMean } from '~/charts/sideMeans'
+import type { Signal } from '~/utils/benchView'
 import { formatTimes } from '~/utils/formatStatistics'
 import { formatIntensity } from '~/utils/formatMeasures'
 

@@ -6,7 +6,7 @@ export type MarkShape = 'circle' | 'square' | 'cross' | 'diamond' | 'triangle'
 
 /** What a drawing is made of; coordinates in pixels of the drawing, and always finite. `says` is told under the pointer. */
 export type DrawnShape =
-  | { kind: 'line', d: string, ink: Ink, weight?: number, dash?: string, says?: string }
+  | { kind: 'line', d: string, ink: Ink, weight?: number, dash?: string, filled?: boolean, says?: string }
   | { kind: 'mark', shape: MarkShape, x: number, y: number, ink: Ink, size?: number, hollow?: boolean, says?: string }
   | { kind: 'text', x: number, y: number, text: string, ink: Ink, anchor?: 'start' | 'middle' | 'end', size?: number, strong?: boolean, turned?: boolean, says?: string }
 

@@ -1,3 +1,5 @@
+import { groupLook } from '~/charts/abundanceLook'
+import { fitText, round, type Drawing, type DrawnShape } from '~/charts/drawing'
 import { logScale } from '~/charts/logScale'
 import { groupLabels, isFound, type SampleGroup, type SampleValue } from '~/charts/sampleValues'
 
@@ -37,6 +39,22 @@ export function sampleDots(values: readonly SampleValue[], names: { a: string, b
     }
   })
   return { width: WIDTH, height: rows.length * ROW + FOOT, rows, ticks: scale.ticks.map(({ at, label }) => ({ x: at, label })) }
+}
+
+/** The dot plot as a drawing. */
+export function dotsDrawing({ width, height, rows, ticks }: SampleDots): Drawing {
+  const shapes = ticks.flatMap(({ x, label }): DrawnShape[] => [
+    { kind: 'line', d: `M${round(x)} 0V${height - 18}`, ink: 'hairline' },
+    { kind: 'text', x: round(x), y: height - 5, text: label, ink: 'muted', anchor: 'middle', size: 11 },
+  ])
+  for (const { group, label, y, floorX, dots, notFound } of rows) {
+    const { shape, ink } = groupLook[group]
+    shapes.push({ kind: 'text', x: 0, y: y + 4, text: fitText(label, LEFT - 4), ink: group === 'A' || group === 'B' ? ink : 'muted', says: label })
+    if (floorX !== null) shapes.push({ kind: 'line', d: `M${round(floorX)} ${y - 12}v24`, ink, weight: 1.5, dash: '3 2' })
+    for (const dot of dots) shapes.push({ kind: 'mark', shape, x: round(dot.x), y: dot.y, ink, size: 3.5, says: dot.name })
+    if (notFound > 0) shapes.push({ kind: 'text', x: width, y: y + 4, text: `${notFound} not`, ink: 'muted', anchor: 'end', size: 11 })
+  }
+  return { width, height, shapes }
 }
 
 /** The dot plot in words. */

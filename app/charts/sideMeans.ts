@@ -5,8 +5,6 @@ import type { ComparisonSettings } from '#shared/science/verdict/settings'
 import { summariseSides } from '#shared/science/verdict/summariseSides'
 import type { Signal } from '~/utils/benchView'
 
-export type { Signal }
-
 export interface PreparationMean { label: string, log2: number }
 
 export interface SideMean {

@@ -11,8 +11,9 @@ export type BenchVersion = Pick<ComparisonDetail['version'], 'number' | 'sideANa
  * each hand it their own.
  */
 export interface BenchSource {
-  /** What the comparison is called. */
+  /** Title of the comparison; of its study too, where the reader may know it. */
   title: string
+  study: string | null
   version: BenchVersion
   /** What an export made on the page says besides what the version itself tells, as sentences. */
   exportNotes: () => string[]
@@ -31,4 +32,6 @@ export interface BenchCapabilities {
   save: boolean
   /** Address of the verdicts as CSV; null: no export. */
   csvAddress: string | null
+  /** Save its plots as figures. */
+  saveFigures: boolean
 }

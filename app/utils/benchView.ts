@@ -36,6 +36,7 @@ export type Plot = (typeof PLOTS)[number]
 /** How the abundance plot lays its samples out, and which signal it draws: in the comparison's normalised counts, or as each table states it. */
 export const ABUNDANCE_LAYOUTS = ['preparation', 'run'] as const
 export type AbundanceLayout = (typeof ABUNDANCE_LAYOUTS)[number]
+/** In the comparison's normalised counts, or as each table states them. */
 export const SIGNALS = ['normalised', 'injected'] as const
 export type Signal = (typeof SIGNALS)[number]
 

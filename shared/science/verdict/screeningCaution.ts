@@ -1,3 +1,6 @@
+/** The same in a line, for what is pasted elsewhere: figures and print. */
+export const SCREENING_LINE = 'Screening indication only: features are told apart by accurate mass and retention time alone. Not a confirmed identification, not a concentration, not a statement of compliance; “not found” does not mean absent.'
+
 /**
  * What a reader outside the laboratory must know of verdicts that carry no names: for shared pages and their exports.
  * @param massPpm mass tolerance of the alignment, ppm

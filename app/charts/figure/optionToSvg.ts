@@ -1,0 +1,18 @@
+import type { EChartsOption } from 'echarts'
+import { init, use } from 'echarts/core'
+import { SVGRenderer } from 'echarts/renderers'
+import { useChartParts } from '~/charts/parts'
+
+/** Draws an option as SVG text, without a page: the same option that the page shows. */
+export function optionToSvg(option: EChartsOption, width: number, height: number): string {
+  useChartParts()
+  use([SVGRenderer])
+  const chart = init(null, null, { renderer: 'svg', ssr: true, width, height })
+  try {
+    chart.setOption({ ...option, animation: false, tooltip: { show: false } })
+    return chart.renderToSVGString()
+  }
+  finally {
+    chart.dispose()
+  }
+}
