@@ -43,7 +43,7 @@ export function abundanceRows({ values, means, names, signal, width }: Abundance
       y += row
     }
     const mean = means.find(each => each.side === group)
-    if (mean && mean.detected > 0 && mean.preparations.length > 1) {
+    if (mean && mean.detected > 1) {
       shapes.push(...meanRow(mean, { y: y + row / 2, left, width, scale }))
       y += row
     }

@@ -27,7 +27,7 @@ export function beamFigure(counts: Record<Verdict, number>, names: SideNames, wi
       label(middle - ARM, 132, `found only here ${formatCount(counts.onlyA)}, more here ${formatCount(counts.moreA)}`, 'muted'),
       label(middle + ARM, 112, `B ${names.b}`, 'sideB', true),
       label(middle + ARM, 132, `found only here ${formatCount(counts.onlyB)}, more here ${formatCount(counts.moreB)}`, 'muted'),
-      label(middle, 152, middles.map(([words, count]) => `${words} ${formatCount(count)}`).join(' · '), 'muted'),
+      label(middle, 152, `features: ${middles.map(([words, count]) => `${words} ${formatCount(count)}`).join(' · ')}`, 'muted'),
       { kind: 'text', x: middle, y: 170, text, ink: 'muted', anchor: 'middle' },
     ],
   }

@@ -8,7 +8,7 @@ export function figureCaption(figure: Pick<Figure, 'axes' | 'settings' | 'isFilt
   const lines: CaptionLine[] = [
     { term: 'Axes', text: [...figure.axes ?? axes].join('; ') },
     ...context.sides.map((text, i) => ({ term: i === 0 ? 'Sides' : '', text })),
-    { term: 'Settings', text: [...figure.settings ?? [], ...context.settings].join('; ') },
+    { term: 'Settings', text: [...figure.settings ?? [], ...context.settings].map(each => each.replace(/\.$/, '')).join('; ') },
     { term: 'Filter', text: figure.isFiltered ? context.filter : '' },
     { term: 'From', text: `${context.origin}; engine ${context.engineVersion}; drawn ${date.toISOString().slice(0, 10)}` },
     ...context.cautions.map((text, i) => ({ term: i === 0 ? 'Caution' : '', text })),

@@ -7,7 +7,7 @@ import { manyVerdicts } from '../../support/manyFeatures'
 
 const many = manyVerdicts(200)
 const onlyA = many.result.columns.verdict.indexOf(VERDICT.onlyA)
-const props = { result: many.result, data: many.input, rows: Int32Array.of(17, 20), settings: many.settings, names: { a: 'Millrace', b: 'Tallow <Lane>' } }
+const props = { result: many.result, data: many.input, first: 17, settings: many.settings, names: { a: 'Millrace', b: 'Tallow <Lane>' } }
 const bench = () => useBenchStore()
 beforeEach(() => bench().show(initialView()))
 
@@ -21,7 +21,7 @@ describe('the abundance plot', () => {
   })
 
   it('has nothing to offer where no feature passes the filter', async () => {
-    const view = await mountSuspended(AbundanceView, { props: { ...props, rows: new Int32Array(0) } })
+    const view = await mountSuspended(AbundanceView, { props: { ...props, first: undefined } })
     expect(view.find('button').exists()).toBe(false)
   })
 

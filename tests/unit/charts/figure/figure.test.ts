@@ -13,7 +13,7 @@ import { displayFactors, sampleValues } from '../../../../app/charts/sampleValue
 import { filterWords } from '../../../../app/utils/filterWords'
 import { initialView } from '../../../../app/utils/benchView'
 import { comparisonDefaults } from '../../../../shared/science/verdict/settings'
-import { light } from '../../../../shared/tokens'
+import { fonts, light } from '../../../../shared/tokens'
 import { comparisonInput, none, onA, onB } from '../../../support/comparisonInput'
 
 const date = new Date('2026-12-01T12:00:00Z')
@@ -41,6 +41,7 @@ function readXml(markup: string): { texts: string[], elements: string[] } {
     const name = /^<\/?(?<name>[\w:-]+)/.exec(part)?.groups?.name ?? ''
     if (part.startsWith('</')) expect(open.pop()).toBe(name)
     else {
+      expect(part).toMatch(/^<[\w:-]+(?:\s+[\w:-]+="[^"<]*")*\s*\/?>$/)
       elements.push(name)
       if (!part.endsWith('/>')) open.push(name)
     }
@@ -107,7 +108,8 @@ describe('a figure as SVG', () => {
     const { svg } = drawFigure({
       name: 'fold change', isFiltered: true,
       option: palette => ({
-        xAxis: { name: `log2 ratio, ${attack} over A`, type: 'value' }, yAxis: { name: 'certainty, −log10 q', type: 'value' },
+        textStyle: { fontFamily: fonts.text },
+        xAxis: { name: `log2 ratio, ${attack} over A`, type: 'value', nameTextStyle: { fontFamily: fonts.text } }, yAxis: { name: 'certainty, −log10 q', type: 'value' },
         series: [{ type: 'scatter', data, dimensions: ['x', 'y'], large: true, largeThreshold: 0, progressive: 0, symbol: 'rect', itemStyle: { color: palette.sideA } }],
       }),
     }, { title: 'Fold change', description: '', context, date, fontUrl: null })
