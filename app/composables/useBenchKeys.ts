@@ -8,8 +8,14 @@ const keyring: InjectionKey<BenchKeyring> = Symbol('benchKeys')
 
 const typing = 'input, select, textarea, [contenteditable=true], [role=dialog], [role=menu]'
 
-/** Keys that act only while the bench has the focus and nobody is typing. Call in the bench itself. */
-export function useBenchKeys(own: BenchKey[]) {
+/** A letter, digit or sign by itself: what WCAG 2.1.4 lets a person put off. Arrows and Esc are none. */
+export const isSingleKey = (key: string) => [...key].length === 1
+
+/**
+ * Keys that act only while the bench has the focus and nobody is typing. Call in the bench itself.
+ * @param singleKeysAct whether letters, digits and signs act too
+ */
+export function useBenchKeys(own: BenchKey[], singleKeysAct: () => boolean = () => true) {
   const keys = shallowRef<BenchKey[]>(own)
   provide(keyring, {
     add: (key) => {
@@ -20,6 +26,7 @@ export function useBenchKeys(own: BenchKey[]) {
   function onKey(event: KeyboardEvent) {
     if (event.ctrlKey || event.metaKey || event.altKey || event.defaultPrevented) return
     if (event.target instanceof Element && event.target.closest(typing)) return
+    if (isSingleKey(event.key) && !singleKeysAct()) return
     const found = keys.value.find(each => each.key === event.key)
     if (!found) return
     event.preventDefault()

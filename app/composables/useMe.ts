@@ -1,7 +1,7 @@
 import { can, type Action, type Role } from '#shared/permissions'
 
 export interface Me {
-  person: { id: string, name: string, signInName: string, roles: Role[] } | null
+  person: { id: string, name: string, signInName: string, roles: Role[], benchKeys: boolean } | null
   demo: boolean
   /** The laboratory still waits for its first account. */
   first: boolean

@@ -36,7 +36,9 @@ export const newPasswordSchema = z.object({ password: passwordSchema })
 export const firstSchema = z.object({ code: requiredText(100), name: requiredText(120), signInName, password: passwordSchema })
 export type FirstInput = z.infer<typeof firstSchema>
 
-export const profileSchema = z.object({ name: requiredText(120) })
+/** What a person changes of their own account; what is left out stays. */
+export const profileSchema = z.object({ name: requiredText(120).optional(), benchKeys: z.boolean({ error: 'Yes or no.' }).optional() })
+  .refine(profile => Object.values(profile).some(value => value !== undefined), 'Nothing to change.')
 export type ProfileInput = z.infer<typeof profileSchema>
 
 export const passwordChangeSchema = z.object({ present: typedPassword, password: passwordSchema })

@@ -1,7 +1,12 @@
 const MARKUP: Readonly<Record<string, string>> = { '&': '&amp;', '<': '&lt;', '>': '&gt;', '"': '&quot;', '\'': '&#39;' }
 
-/** Text as it stands within markup, as content or as an attribute; signs that XML forbids are left out. */
-export function escapeXml(text: string): string {
+/** Leaves out the signs that XML forbids: most control characters, and halves of signs. */
+export function allowedXml(text: string): string {
   // eslint-disable-next-line no-control-regex
-  return text.toWellFormed().replace(/[\u0000-\u0008\u000B\u000C\u000E-\u001F\uFFFE\uFFFF]/g, '').replace(/[&<>"']/g, sign => MARKUP[sign] ?? '')
+  return text.toWellFormed().replace(/[\u0000-\u0008\u000B\u000C\u000E-\u001F\uFFFE\uFFFF]/g, '')
+}
+
+/** Text as it stands within markup, as content or as an attribute. */
+export function escapeXml(text: string): string {
+  return allowedXml(text).replace(/[&<>"']/g, sign => MARKUP[sign] ?? '')
 }

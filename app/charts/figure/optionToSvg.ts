@@ -1,6 +1,7 @@
 import type { EChartsOption } from 'echarts'
 import { init, use } from 'echarts/core'
 import { SVGRenderer } from 'echarts/renderers'
+import { allowedXml } from '~/charts/figure/escapeXml'
 import { fonts } from '#shared/tokens'
 import { useChartParts } from '~/charts/parts'
 
@@ -12,7 +13,7 @@ export function optionToSvg(option: EChartsOption, width: number, height: number
   try {
     chart.setOption({ ...option, animation: false, tooltip: { show: false } })
     // It writes the names of fonts into an attribute as they are; their quotes would end it.
-    return [fonts.text, fonts.numbers].reduce((svg, font) => svg.replaceAll(font, font.replaceAll('"', '\'')), chart.renderToSVGString())
+    return [fonts.text, fonts.numbers].reduce((svg, font) => svg.replaceAll(font, font.replaceAll('"', '\'')), allowedXml(chart.renderToSVGString()))
   }
   finally {
     chart.dispose()

@@ -1,6 +1,6 @@
 import { eq } from 'drizzle-orm'
 import type { PasswordChangeInput, ProfileInput } from '../../../shared/schemas/person'
-import type { Database } from '../../db/open'
+import type { Connection, Database } from '../../db/open'
 import { people } from '../../db/schema'
 import { record } from '../activity/record'
 import { DomainError, notFound } from '../DomainError'
@@ -10,11 +10,18 @@ import type { SignInMeans, StartedSession } from '../session/signIn'
 import { withdrawLinks } from './invitations'
 import type { Person } from './person'
 
+/** What a person may change of their account, as it stands. */
+export function ownProfile(db: Connection, person: Person): Required<ProfileInput> {
+  const profile = db.select({ name: people.name, benchKeys: people.benchKeys }).from(people).where(eq(people.id, person.id)).get()
+  if (!profile) throw notFound()
+  return profile
+}
+
 export function editProfile(db: Database, input: ProfileInput, person: Person) {
   return db.transaction((tx) => {
-    tx.update(people).set({ name: input.name }).where(eq(people.id, person.id)).run()
+    tx.update(people).set(input).where(eq(people.id, person.id)).run()
     record(tx, { personId: person.id, action: 'edit profile', subjectId: person.id })
-    return { name: input.name }
+    return ownProfile(tx, person)
   })
 }
 

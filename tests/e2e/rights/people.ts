@@ -19,7 +19,7 @@ const file: RightsFile = {
     { route: 'POST /api/people/[personId]/link', needs: 'managePeople', before },
     { route: 'POST /api/people/[personId]/close', needs: 'managePeople', before },
     { route: 'POST /api/people/[personId]/reopen', needs: 'managePeople', before },
-    { route: 'PATCH /api/me', needs: 'signedIn', body: () => ({ name: 'a person' }) },
+    { route: 'PATCH /api/me', needs: 'signedIn', body: () => ({ name: 'a person', benchKeys: false }) },
     // Without its body: a change would end the asker's session. tests/e2e/signIn.test.ts has it in full.
     { route: 'PUT /api/me/password', needs: 'signedIn', ok: 400 },
     // Open to all, for those who hold a secret; what opens is in tests/e2e/people.test.ts.

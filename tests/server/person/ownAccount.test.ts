@@ -3,9 +3,10 @@ import { afterEach, beforeEach, describe, expect, it } from 'vitest'
 import { activity, people } from '../../../server/db/schema'
 import { findInvitation } from '../../../server/domain/person/invitations'
 import { renewLink } from '../../../server/domain/person/managePerson'
-import { changePassword, editProfile } from '../../../server/domain/person/ownAccount'
+import { changePassword, editProfile, ownProfile } from '../../../server/domain/person/ownAccount'
 import type { Person } from '../../../server/domain/person/person'
 import { findSessionPerson, startSession } from '../../../server/domain/session/sessions'
+import { profileSchema } from '../../../shared/schemas/person'
 import { addTestPerson, openTestLaboratory, type TestLaboratory } from '../../support/laboratory'
 import { testMeans } from '../../support/means'
 
@@ -61,7 +62,21 @@ describe('changePassword', () => {
 describe('editProfile', () => {
   it('changes one\'s own name alone', () => {
     const other = addTestPerson(laboratory, 'student')
-    editProfile(laboratory.db, { name: 'Ada Quill' }, ada)
+    expect(editProfile(laboratory.db, { name: 'Ada Quill' }, ada)).toEqual({ name: 'Ada Quill', benchKeys: true })
     expect(laboratory.db.select({ name: people.name }).from(people).all().map(row => row.name).sort()).toEqual(['Ada Quill', other.name].sort())
+  })
+
+  it('puts one\'s own keys of the bench off, and on again, and leaves the name', () => {
+    const other = addTestPerson(laboratory, 'student')
+    expect(ownProfile(laboratory.db, ada)).toEqual({ name: ada.name, benchKeys: true })
+    expect(editProfile(laboratory.db, { benchKeys: false }, ada)).toEqual({ name: ada.name, benchKeys: false })
+    expect(ownProfile(laboratory.db, other).benchKeys).toBe(true)
+    expect(editProfile(laboratory.db, { benchKeys: true }, ada).benchKeys).toBe(true)
+  })
+
+  it('is not asked to change nothing, or to something that is no choice', () => {
+    expect(profileSchema.safeParse({}).success).toBe(false)
+    expect(profileSchema.safeParse({ benchKeys: 'no' }).success).toBe(false)
+    expect(profileSchema.safeParse({ name: ' ' }).success).toBe(false)
   })
 })

@@ -1,0 +1,88 @@
+import { readFileSync, rmSync } from 'node:fs'
+import type { Browser, Page } from 'playwright-core'
+import { afterAll, beforeAll, describe, expect, it } from 'vitest'
+import { addBenchStudy, type BenchStudy } from '../support/benchStudy'
+import { launchBrowser } from '../support/browser'
+import { startBuiltServer, type BuiltServer } from '../support/builtServer'
+import { openBench, signInPage } from '../support/openBench'
+import { readSvg } from '../support/readSvg'
+import { watchedPage } from '../support/watchedPage'
+
+let study: BenchStudy
+let server: BuiltServer
+let browser: Browser
+beforeAll(async () => {
+  study = await addBenchStudy(300)
+  server = await startBuiltServer({ folder: study.folder, env: { NUXT_SESSION_COOKIE_SECURE: 'false' } })
+  browser = await launchBrowser()
+})
+afterAll(async () => {
+  await browser?.close()
+  await server?.stop()
+  if (study) rmSync(study.folder, { recursive: true, force: true })
+})
+
+async function onBench(query: string, act: (page: Page) => Promise<void>, signInName = 'analyst') {
+  const watched = await watchedPage(browser, {})
+  try {
+    await signInPage(watched.page, server.url, signInName)
+    await openBench(watched.page, server.url, study, query)
+    await act(watched.page)
+    expect(watched.problems()).toEqual([])
+  }
+  finally {
+    await watched.close()
+  }
+}
+
+/** Saves a figure; what arrives as a file, and what was asked for meanwhile apart from the program's own parts. */
+async function saved(page: Page, figure: RegExp, format: 'SVG' | 'PNG') {
+  const asked: string[] = []
+  page.on('request', request => asked.push(request.url()))
+  const [download] = await Promise.all([
+    page.waitForEvent('download', { timeout: 120_000 }),
+    page.getByRole('group', { name: figure }).getByRole('button', { name: format }).click(),
+  ])
+  const bytes = readFileSync(await download.path())
+  return { name: download.suggestedFilename(), bytes, asked: asked.filter(url => !/^(?:blob|data):/.test(url) && !url.startsWith(`${server.url}/_nuxt/`)) }
+}
+
+const pngSize = (bytes: Buffer) => [bytes.readUInt32BE(16), bytes.readUInt32BE(20)]
+
+describe('figures', () => {
+  it('are saved as SVG and PNG in the browser, with axes, units and limits', () => onBench('?feature=12', async (page) => {
+    await page.getByRole('tab', { name: 'Components' }).click()
+    const figure = /Save figure: Loadings/
+    await page.getByRole('group', { name: figure }).waitFor({ timeout: 120_000 })
+    await page.getByRole('button', { name: /found only in Millrace/ }).click()
+    await expect.poll(() => new URL(page.url()).searchParams.get('verdict')).toBe('onlyA')
+    const svg = await saved(page, figure, 'SVG')
+    expect(svg.name).toMatch(/^loadings_.+_v2\.svg$/)
+    expect(svg.asked).toEqual([])
+    const read = readSvg(svg.bytes.toString('utf8'))
+    expect(read.width).toBe(1008)
+    expect(read.elements).not.toContain('script')
+    for (const part of ['across: loading on PC1', 'Reach limit: ×5', 'A Millrace: 3 preparations', 'Screening indication only', 'version 2', 'Sent to waste: 0 to 0.8 min']) expect(read.texts.join(' ')).toContain(part)
+    expect(read.texts.join('\n')).toMatch(/\d+ of \d+ features: found only in Millrace/)
+
+    const png = await saved(page, figure, 'PNG')
+    expect(png.bytes.subarray(1, 4).toString('latin1')).toBe('PNG')
+    expect(pngSize(png.bytes)).toEqual([2 * read.width, 2 * read.height])
+    expect(png.asked).toEqual([])
+  }))
+
+  it('show the abundance of what is selected, and say how', () => onBench('?feature=12&verdict=onlyA', async (page) => {
+    await page.getByRole('tab', { name: 'Abundance' }).click()
+    await page.getByRole('radio', { name: 'as injected' }).click()
+    await expect.poll(() => new URL(page.url()).searchParams.get('signal')).toBe('injected')
+    const read = readSvg((await saved(page, /Save figure: Abundance of m\/z/, 'SVG')).bytes.toString('utf8'))
+    expect(read.texts.join('\n')).toContain('intensity, counts as injected')
+    expect(read.texts.join('\n')).not.toContain('features: found only')
+    expect(pngSize((await saved(page, /Save figure: Abundance of m\/z/, 'PNG')).bytes)).toEqual([2 * read.width, 2 * read.height])
+  }))
+
+  it('are not offered to who may not export', () => onBench('?feature=12', async (page) => {
+    await page.getByText('Values per sample').waitFor()
+    expect(await page.getByRole('button', { name: 'SVG' }).count()).toBe(0)
+  }, 'student'))
+})
