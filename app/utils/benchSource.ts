@@ -4,7 +4,7 @@ import type { VerdictResult } from '#shared/science/verdict/verdictResult'
 import type { ComparisonDetail } from '#shared/types/comparison'
 
 /** What the bench must know of the version it shows; a comparison of a study and a shared one both have it. */
-export type BenchVersion = Pick<ComparisonDetail['version'], 'number' | 'sideAName' | 'sideBName' | 'counts' | 'settings' | 'samples' | 'cautions' | 'engineVersion' | 'polarity' | 'massKind'>
+export type BenchVersion = Pick<ComparisonDetail['version'], 'number' | 'sideAName' | 'sideBName' | 'counts' | 'settings' | 'samples' | 'cautions' | 'engineVersion' | 'polarity' | 'massKind' | 'alignMassPpm' | 'createdAt'>
 
 /**
  * Where the bench gets what it shows. It knows no address of the server: the page of a study and the page of a share link

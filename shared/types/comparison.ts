@@ -43,6 +43,8 @@ export interface ComparisonDetail {
     /** What its masses are: of ions of this polarity, or of neutral molecules. */
     polarity: Polarity
     massKind: MassKind
+    /** Mass tolerance of its alignment and of its traces, ppm. */
+    alignMassPpm: number
     cautions: string[]
     /** In the order of the samples. */
     tables: { sampleName: string, fileName: string, digest: string }[]

@@ -35,40 +35,38 @@ async function onBench(query: string, act: (page: Page) => Promise<void>, signIn
   }
 }
 
-/** Saves a figure; what arrives as a file, and what was asked for meanwhile apart from the program's own parts. */
+/** Saves a figure; what arrives as a file, and what was sent meanwhile: anything but plain reading from the own server. */
 async function saved(page: Page, figure: RegExp, format: 'SVG' | 'PNG') {
   const asked: string[] = []
-  page.on('request', request => asked.push(request.url()))
+  page.on('request', request => asked.push(`${request.method()} ${request.url()}`))
   const [download] = await Promise.all([
     page.waitForEvent('download', { timeout: 120_000 }),
     page.getByRole('group', { name: figure }).getByRole('button', { name: format }).click(),
   ])
   const bytes = readFileSync(await download.path())
-  return { name: download.suggestedFilename(), bytes, asked: asked.filter(url => !/^(?:blob|data):/.test(url) && !url.startsWith(`${server.url}/_nuxt/`)) }
+  return { name: download.suggestedFilename(), bytes, sent: asked.filter(each => !/^GET (?:blob|data):/.test(each) && !each.startsWith(`GET ${server.url}/`)) }
 }
 
 const pngSize = (bytes: Buffer) => [bytes.readUInt32BE(16), bytes.readUInt32BE(20)]
 
 describe('figures', () => {
   it('are saved as SVG and PNG in the browser, with axes, units and limits', () => onBench('?feature=12', async (page) => {
-    await page.getByRole('tab', { name: 'Components' }).click()
-    const figure = /Save figure: Loadings/
-    await page.getByRole('group', { name: figure }).waitFor({ timeout: 120_000 })
+    const figure = /Save figure: Fold change/
     await page.getByRole('button', { name: /found only in Millrace/ }).click()
     await expect.poll(() => new URL(page.url()).searchParams.get('verdict')).toBe('onlyA')
     const svg = await saved(page, figure, 'SVG')
-    expect(svg.name).toMatch(/^loadings_.+_v2\.svg$/)
-    expect(svg.asked).toEqual([])
+    expect(svg.name).toMatch(/^fold-change_.+_v2\.svg$/)
+    expect(svg.sent).toEqual([])
     const read = readSvg(svg.bytes.toString('utf8'))
     expect(read.width).toBe(1008)
     expect(read.elements).not.toContain('script')
-    for (const part of ['across: loading on PC1', 'Reach limit: ×5', 'A Millrace: 3 preparations', 'Screening indication only', 'version 2', 'Sent to waste: 0 to 0.8 min']) expect(read.texts.join(' ')).toContain(part)
+    for (const part of ['across: log2 ratio, Tallow Lane over Millrace', 'certainty, −log10 q', 'Mass tolerance between tables and of traces: 10 ppm', 'Reach limit: ×5', 'A Millrace: 3 preparations', 'Screening indication only', 'version 2', 'Sent to waste: 0 to 0.8 min']) expect(read.texts.join(' ')).toContain(part)
     expect(read.texts.join('\n')).toMatch(/\d+ of \d+ features: found only in Millrace/)
 
     const png = await saved(page, figure, 'PNG')
     expect(png.bytes.subarray(1, 4).toString('latin1')).toBe('PNG')
     expect(pngSize(png.bytes)).toEqual([2 * read.width, 2 * read.height])
-    expect(png.asked).toEqual([])
+    expect(png.sent).toEqual([])
   }))
 
   it('show the abundance of what is selected, and say how', () => onBench('?feature=12&verdict=onlyA', async (page) => {

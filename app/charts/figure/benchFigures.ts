@@ -14,7 +14,7 @@ export function benchFigures({ title, study, version }: Pick<BenchSource, 'title
   return {
     file: [title, `v${version.number}${preview ? ' preview' : ''}`],
     sides: (['A', 'B'] as const).map(side => `${side} ${names[side]}: ${sideText(version.samples, side)} (${samplesOf(version.samples, side)})`),
-    settings: settingWords(settings).map(([name, value]) => `${name}: ${value}`),
+    settings: [`Mass tolerance between tables and of traces: ${version.alignMassPpm} ppm`, ...settingWords(settings).map(([name, value]) => `${name}: ${value}`)],
     filter,
     origin: [study, `“${title}”`, `version ${version.number}${preview ? ', previewed under other limits, not saved' : ''}`].filter(Boolean).join('; '),
     engineVersion: version.engineVersion,

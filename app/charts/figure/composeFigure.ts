@@ -3,8 +3,7 @@ import { textWidth } from '~/charts/drawing'
 import { escapeXml } from '~/charts/figure/escapeXml'
 import type { CaptionLine } from '~/charts/figure/figureCaption'
 
-/** Pixels of a figure's drawing, and the paper around it. */
-export const FIGURE_WIDTH = 960
+/** Pixels around the drawing. */
 const LEAST_WIDTH = 560
 const MARGIN = 24
 const TITLE = 34

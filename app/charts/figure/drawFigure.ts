@@ -1,7 +1,7 @@
 import { light } from '#shared/tokens'
-import { composeFigure, FIGURE_WIDTH } from '~/charts/figure/composeFigure'
+import { composeFigure } from '~/charts/figure/composeFigure'
 import { drawingToSvg } from '~/charts/figure/drawingToSvg'
-import type { Figure, FigureContext } from '~/charts/figure/figure'
+import { FIGURE_WIDTH, type Figure, type FigureContext } from '~/charts/figure/figure'
 import { axisNames, figureCaption } from '~/charts/figure/figureCaption'
 import { optionToSvg } from '~/charts/figure/optionToSvg'
 
@@ -15,7 +15,7 @@ export function drawFigure(figure: Figure, { title, description, context, date, 
     return composeFigure({ ...common, drawing: drawingToSvg(drawing, light), width: drawing.width, height: drawing.height, caption: figureCaption(figure, context, [], date) })
   }
   if (!figure.option) throw new Error(`The figure "${figure.name}" has nothing to draw.`)
-  const option = figure.option(light)
+  const option = figure.option(light, FIGURE_WIDTH)
   const height = figure.height ?? DEFAULT_HEIGHT
   return composeFigure({ ...common, drawing: optionToSvg(option, FIGURE_WIDTH, height), width: FIGURE_WIDTH, height, caption: figureCaption(figure, context, axisNames(option), date) })
 }

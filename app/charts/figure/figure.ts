@@ -6,7 +6,7 @@ import type { Drawing } from '~/charts/drawing'
 export interface Figure {
   /** Names the plot in the name of the file: "fold change". */
   name: string
-  option?: (palette: Palette) => EChartsOption
+  option?: (palette: Palette, width: number) => EChartsOption
   drawing?: (width: number) => Drawing
   /** Pixels, of an option; a drawing has its own. */
   height?: number
@@ -32,6 +32,9 @@ export interface FigureContext {
   engineVersion: string
   cautions: string[]
 }
+
+/** Pixels of a figure's drawing. */
+export const FIGURE_WIDTH = 960
 
 export const FIGURE_FORMATS = ['svg', 'png'] as const
 export type FigureFormat = (typeof FIGURE_FORMATS)[number]

@@ -23,9 +23,9 @@ const flat = (value: number) => new Float64Array(1000).fill(value)
 function sourceWith(rest: Partial<BenchSource>): BenchSource {
   const { counts, cautions } = many.result
   const version: BenchSource['version'] = {
-    number: 1, sideAName: names.a, sideBName: names.b, counts, cautions, settings: many.settings, samples: [...many.input.samples], engineVersion: '1', polarity: 'negative', massKind: 'mz',
+    number: 1, sideAName: names.a, sideBName: names.b, counts, cautions, settings: many.settings, samples: [...many.input.samples], engineVersion: '1', polarity: 'negative', massKind: 'mz', alignMassPpm: 10, createdAt: '2026-12-01T12:00:00.000Z',
   }
-  return { title: 'Apple juices', version, exportNotes: () => [], loadVerdicts: async () => many.result, loadData: null, loadTraces: null, loadExtracted: null, ...rest }
+  return { title: 'Apple juices', study: null, version, exportNotes: () => [], loadVerdicts: async () => many.result, loadData: null, loadTraces: null, loadExtracted: null, ...rest }
 }
 const mountWith = (rest: Partial<BenchSource> = {}, data: typeof many.input | null = many.input) =>
   mountSuspended(MirroredChromatogram, { props: { source: sourceWith(rest), result: many.result, data, rows, settings: many.settings, names, flagged: new Set([3]) } })

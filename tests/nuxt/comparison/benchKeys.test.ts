@@ -1,5 +1,5 @@
 import { mountSuspended, registerEndpoint } from '@nuxt/test-utils/runtime'
-import { beforeEach, describe, expect, it } from 'vitest'
+import { afterEach, beforeEach, describe, expect, it } from 'vitest'
 import { defineComponent, h } from 'vue'
 import BenchKeysHelp from '~/components/comparison/BenchKeysHelp.vue'
 import BenchKeysField from '~/components/person/BenchKeysField.vue'
@@ -39,8 +39,10 @@ describe('keys of the bench', () => {
 
 describe('the help with keys', () => {
   const keys: BenchKey[] = [{ key: 'j', says: 'next feature', act: () => undefined }, { key: 'Escape', says: 'clear', act: () => undefined }]
+  let help: Awaited<ReturnType<typeof mountSuspended>> | null = null
+  afterEach(() => help?.unmount())
   const shown = async () => {
-    await mountSuspended(BenchKeysHelp, { props: { keys, open: true } })
+    help = await mountSuspended(BenchKeysHelp, { props: { keys, open: true } })
     return document.body.querySelector('[role=dialog]')
   }
 

@@ -70,7 +70,7 @@ describe('a new comparison', () => {
       { name: 'extra', side: null, floor: 30, floorSource: 'estimated' },
       { name: 'blank', side: null, floor: 20, floorSource: 'estimated' },
     ])
-    expect({ polarity: first.polarity, massKind: first.massKind }).toEqual({ polarity: 'negative', massKind: 'mz' })
+    expect({ polarity: first.polarity, massKind: first.massKind, alignMassPpm: first.alignMassPpm }).toEqual({ polarity: 'negative', massKind: 'mz', alignMassPpm: 10 })
     expect(verdicts(id)).toEqual(['level', 'onlyA', 'onlyB', 'setAside'])
     expect(first.counts).toMatchObject({ level: 1, onlyA: 1, onlyB: 1, setAside: 1, inNeither: 0 })
     expect(first.cautions.join(' ')).toContain('Assumed precision')

@@ -115,12 +115,12 @@ describe('the file of a figure', () => {
 
 describe('what stands under the figures of a bench', () => {
   const { samples } = comparisonInput([onA('M1', [1]), onA('M2', [1]), onB('T1', [1])])
-  const source = { title: 'Press and carton', study: 'Apple juices', version: { number: 2, sideAName: 'Millrace', sideBName: 'Tallow Lane', counts: beamCounts(), settings: comparisonDefaults, samples: samples.map(sample => ({ ...sample })), cautions: ['Few replicates.'], engineVersion: '4', polarity: 'negative' as const, massKind: 'mz' as const } }
+  const source = { title: 'Press and carton', study: 'Apple juices', version: { number: 2, sideAName: 'Millrace', sideBName: 'Tallow Lane', counts: beamCounts(), settings: comparisonDefaults, samples: samples.map(sample => ({ ...sample })), cautions: ['Few replicates.'], engineVersion: '4', polarity: 'negative' as const, massKind: 'mz' as const, alignMassPpm: 10, createdAt: '2026-12-01T12:00:00.000Z' } }
 
   it('names sides with their preparations, limits, normalisation and cautions', () => {
     const under = benchFigures(source, comparisonDefaults, 'none', false)
     expect(under.sides).toEqual(['A Millrace: 2 preparations, 100 mg (M1, M2)', 'B Tallow Lane: 1 preparation, 100 mg (T1)'])
-    expect(under.settings).toEqual(expect.arrayContaining(['Amount step: on', 'Reach limit: ×3', 'Fold limit: ×2']))
+    expect(under.settings).toEqual(expect.arrayContaining(['Mass tolerance between tables and of traces: 10 ppm', 'Amount step: on', 'Reach limit: ×3', 'Fold limit: ×2']))
     expect(under.cautions[0]).toContain('Screening')
     expect(under.origin).toBe('Apple juices; “Press and carton”; version 2')
   })
