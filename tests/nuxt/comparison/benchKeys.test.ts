@@ -1,12 +1,14 @@
-import { mountSuspended, registerEndpoint } from '@nuxt/test-utils/runtime'
-import { afterEach, beforeEach, describe, expect, it } from 'vitest'
+import { mockNuxtImport, mountSuspended, registerEndpoint } from '@nuxt/test-utils/runtime'
+import { beforeEach, describe, expect, it, vi } from 'vitest'
 import { defineComponent, h } from 'vue'
 import BenchKeysHelp from '~/components/comparison/BenchKeysHelp.vue'
 import BenchKeysField from '~/components/person/BenchKeysField.vue'
 import { isSingleKey, useBenchKeys, type BenchKey } from '~/composables/useBenchKeys'
 
 const me = (benchKeys: boolean) => ({ person: { id: 'a', name: 'Ada', signInName: 'ada', roles: ['analyst'], benchKeys }, demo: false, first: false })
-const signedIn = (state: ReturnType<typeof me> | null) => { useNuxtData('me').data.value = state }
+const asked = vi.hoisted(() => ({ me: null as unknown }))
+mockNuxtImport('useNuxtData', () => () => ({ data: ref(asked.me) }))
+const signedIn = (state: ReturnType<typeof me> | null) => { asked.me = state }
 beforeEach(() => {
   signedIn(null)
   useCookie('steelyard-bench-keys').value = null
@@ -39,11 +41,9 @@ describe('keys of the bench', () => {
 
 describe('the help with keys', () => {
   const keys: BenchKey[] = [{ key: 'j', says: 'next feature', act: () => undefined }, { key: 'Escape', says: 'clear', act: () => undefined }]
-  let help: Awaited<ReturnType<typeof mountSuspended>> | null = null
-  afterEach(() => help?.unmount())
   const shown = async () => {
-    help = await mountSuspended(BenchKeysHelp, { props: { keys, open: true } })
-    return document.body.querySelector('[role=dialog]')
+    await mountSuspended(BenchKeysHelp, { props: { keys, open: true } })
+    return [...document.body.querySelectorAll('[role=dialog]')].at(-1)
   }
 
   it('gives a guest a switch that this browser keeps', async () => {
@@ -69,16 +69,16 @@ describe('the help with keys', () => {
 
 describe('the switch in the profile', () => {
   it('is saved at once', async () => {
-    const asked: unknown[] = []
+    const sent: unknown[] = []
     registerEndpoint('/api/me', { method: 'PATCH', handler: async (event) => {
       const { readBody } = await import('h3')
-      asked.push(await readBody(event))
+      sent.push(await readBody(event))
       return { name: 'Ada', benchKeys: false }
     } })
     registerEndpoint('/api/me', { method: 'GET', handler: () => me(false) })
     const field = await mountSuspended(BenchKeysField, { props: { on: true } })
     await field.get('input').setValue(false)
     await expect.poll(() => field.get('[role=status]').text()).toBe('Saved: off.')
-    expect(asked).toEqual([{ benchKeys: false }])
+    expect(sent).toEqual([{ benchKeys: false }])
   })
 })
