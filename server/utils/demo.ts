@@ -3,7 +3,7 @@ import { makeDemo } from '../domain/demo/makeDemo'
 import { publicFileNames, publicTraceNames } from '../domain/demo/publicFiles'
 import type { Laboratory } from './laboratory'
 
-const state: Omit<DemoState, 'files'> = { making: false, now: '', problem: null }
+const state: Omit<DemoState, 'files' | 'traceFiles'> = { making: false, now: '', problem: null }
 const stopping = new AbortController()
 let made: Promise<void> = Promise.resolve()
 
