@@ -54,7 +54,8 @@ export function chromatogramOption(input: ChromatogramInput): EChartsOption {
     animation: false,
     aria: { enabled: false },
     textStyle: chartText(palette),
-    grid: { ...frame, show: true, borderColor: palette.hairline },
+    // The drawing must not make room of its own for labels: the brush over it goes by the same frame.
+    grid: { ...frame, outerBoundsMode: 'none', show: true, borderColor: palette.hairline },
     xAxis: { ...plainAxis(palette, 'retention time, minutes', 26), type: 'value', min: window[0], max: window[1], splitLine: { show: false }, axisLine: { onZero: false, lineStyle: { color: palette.muted } }, axisLabel: { ...chartText(palette), showMinLabel: false, showMaxLabel: false, formatter: (value: number) => Number(value.toFixed(3)).toString() } },
     yAxis: { ...plainAxis(palette, narrow ? '' : valueName(scale, byAmount), 56), type: 'value', min: -highest, max: highest, interval: step, splitLine: { lineStyle: { color: palette.hairline, opacity: 0.6 } }, axisLabel: { ...chartText(palette), formatter: (value: number) => scale === 'own' ? `${Math.abs(Math.round(value))} %` : formatIntensity(Math.abs(value)) } },
     series: [

@@ -35,7 +35,7 @@ export const isSameWindow = (one: TimeWindow | null, other: TimeWindow | null) =
 
 /** Room around the plot, CSS pixels; the same in the drawing and for whatever lies over it. */
 export interface PlotFrame { left: number, right: number, top: number, bottom: number }
-export const plotFrame = (narrow: boolean): PlotFrame => ({ left: narrow ? 58 : 72, right: 12, top: 10, bottom: 42 })
+export const plotFrame = (narrow: boolean): PlotFrame => ({ left: narrow ? 70 : 96, right: 12, top: 10, bottom: 42 })
 
 /** Width of the plot within a drawing, CSS pixels. */
 export const plotWidth = (drawingWidth: number, { left, right }: PlotFrame) => Math.max(1, drawingWidth - left - right)

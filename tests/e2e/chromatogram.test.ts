@@ -46,7 +46,7 @@ async function onChromatogram(query: string, act: (page: Page, plot: Locator) =>
 const queryOf = (page: Page) => Object.fromEntries(new URL(page.url()).searchParams)
 const patient = { timeout: 60_000 }
 /** Room left and right of the plot, CSS pixels, as on wide pages. */
-const [LEFT, RIGHT] = [72, 12]
+const [LEFT, RIGHT] = [96, 12]
 async function placeAt(plot: Locator, share: number, half: 'A' | 'B' = 'A') {
   const box = await plot.boundingBox()
   if (!box) throw new Error('the chromatogram is not drawn')

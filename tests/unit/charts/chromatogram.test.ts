@@ -3,6 +3,7 @@ import { describe, expect, it } from 'vitest'
 import { scaledCurves, type SampleLine } from '../../../app/charts/chromatogramCurves'
 import { chromatogramOption, type ChromatogramInput } from '../../../app/charts/chromatogramOption'
 import { chromatogramText, chromatogramTitle, highestPoints } from '../../../app/charts/chromatogramText'
+import { plotFrame } from '../../../app/charts/chromatogramWindow'
 import { light } from '../../../shared/tokens'
 
 const names = { a: 'Millrace', b: 'Tallow Lane' }
@@ -34,6 +35,10 @@ describe('the mirrored chromatogram', () => {
     const { yAxis } = chromatogramOption(input)
     expect(yAxis).toMatchObject({ min: -1200, max: 1200, interval: 200 })
     expect(chromatogramOption({ ...input, window: [10, 14] }).yAxis).toMatchObject({ min: -500, interval: 100 })
+  })
+
+  it('stands exactly in the frame that the brush over it goes by', () => {
+    for (const narrow of [false, true]) expect(chromatogramOption({ ...input, narrow }).grid).toMatchObject({ ...plotFrame(narrow), outerBoundsMode: 'none' })
   })
 
   it('draws few points of many and loses no top, at each zoom', () => {
