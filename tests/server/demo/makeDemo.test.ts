@@ -1,10 +1,14 @@
+import { gunzipSync } from 'node:zlib'
 import { and, eq } from 'drizzle-orm'
 import { afterEach, describe, expect, it } from 'vitest'
 import { alignments, alignmentTables, comparisons, comparisonVersions, flags, layouts, samples, studies, tables, traces, uploads } from '../../../server/db/schema'
+import { ionsOf } from '../../../server/domain/demo/ions'
 import { makeDemo } from '../../../server/domain/demo/makeDemo'
 import { demoStudies } from '../../../server/domain/demo/studies'
 import { jobKinds } from '../../../server/jobs'
 import { Jobs } from '../../../server/jobs/runner'
+import { unpackVerdicts } from '../../../shared/formats/verdictColumns'
+import { REASONS } from '../../../shared/science/verdict/reasons'
 import { addTestPerson, addTestStudy, openTestLaboratory, workerSources, type TestLaboratory } from '../../support/laboratory'
 
 let laboratory: TestLaboratory
@@ -58,6 +62,15 @@ describe('making the demo laboratory', { timeout: 240_000 }, () => {
     expect(version?.counts.onlyA).toBeGreaterThan(20)
     expect(version?.counts.setAside).toBeGreaterThan(50)
     expect(version?.settings.divertWindows).toEqual(demoStudies[0].method.divertWindows)
+    // What its tables alone would call found on one side stands in the other's traces: two juices, three bottles each.
+    expect(version?.traces).toHaveLength(6)
+    const { columns } = unpackVerdicts(gunzipSync(version?.columns ?? Buffer.alloc(0)))
+    const ions = ionsOf(demoStudies[0].compounds)
+    for (const { compound } of demoStudies[0].overlooked ?? []) {
+      const ion = ions.find(each => demoStudies[0].compounds[each.compound]?.name === compound)
+      const there = [...columns.mz].flatMap((mz, i) => Math.abs(mz - (ion?.mz ?? 0)) / mz < 8e-6 && Math.abs(columns.retentionMinutes[i]! - (ion?.retentionMinutes ?? 0)) < 0.2 ? [REASONS[columns.reason[i]!]] : [])
+      expect(there, compound).toContain('signalInTrace')
+    }
     // The seconds-and-semicolon files were answered once and their layout remembered.
     expect(db.select().from(layouts).all().length).toBeGreaterThan(0)
     expect(told.at(-1)).toContain('study 3 of 3')
