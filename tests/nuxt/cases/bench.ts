@@ -70,7 +70,7 @@ export const benchRows: ComponentRows = {
     }),
   ],
   'comparison/ComparisonBench': [
-    holds(ComparisonBench, 'loads what it shows, selects, and clears a filter that nothing passes', { props: { source: inventedSource, capabilities: { save: true, csvAddress: null } } }, async ({ find, press, text, fill, until }) => {
+    holds(ComparisonBench, 'loads what it shows, selects, and clears a filter that nothing passes', { props: { source: inventedSource, capabilities: { save: true, csvAddress: null, saveFigures: true } } }, async ({ find, press, text, fill, until }) => {
       await until(() => expect(find('[role=grid]').attributes('aria-rowcount')).toMatch(/^\d{2,}$/))
       await find('[role=grid]').trigger('keydown', { key: 'ArrowDown' })
       await until(() => expect(text()).toMatch(/feature #\d+/))
@@ -81,7 +81,7 @@ export const benchRows: ComponentRows = {
       await press('Keys of the bench (?)')
       expect(find('[role=dialog]').text()).toContain('next feature')
     }),
-    holds(ComparisonBench, 'says why there is nothing to show', { props: { source: { ...inventedSource, loadVerdicts: () => Promise.reject(new Error('gone')) }, capabilities: { save: false, csvAddress: '/verdicts.csv' } } }, async ({ find, text, control, until }) => {
+    holds(ComparisonBench, 'says why there is nothing to show', { props: { source: { ...inventedSource, loadVerdicts: () => Promise.reject(new Error('gone')) }, capabilities: { save: false, csvAddress: '/verdicts.csv', saveFigures: true } } }, async ({ find, text, control, until }) => {
       await until(() => expect(find('[role=alert]').text()).toContain('Something went wrong on this page.'))
       expect(text()).toContain('Nothing to show.')
       expect(control('Verdicts as CSV').attributes('href')).toBe('/verdicts.csv')
@@ -97,7 +97,7 @@ export const benchRows: ComponentRows = {
     }),
   ],
   'comparison/ComponentLoadings': [
-    holds(ComponentLoadings, 'names the farthest features, each to be selected', { props: { found, columns: result.columns, rows, sampleCount: part.length, pair, foldLimit: 1, names: sideNames, narrow: false } }, async ({ press }) => {
+    holds(ComponentLoadings, 'names the farthest features, each to be selected', { props: { found, columns: result.columns, rows, sampleCount: part.length, pair, foldLimit: 1, names: sideNames, narrow: false, basis: 'log2 of 60 features.' } }, async ({ press }) => {
       await press('Show as table')
       const first = document.querySelector<HTMLElement>('tbody button')
       first?.click()
@@ -107,7 +107,7 @@ export const benchRows: ComponentRows = {
     }),
   ],
   'comparison/ComponentScores': [
-    holds(ComponentScores, 'gives each sample\'s scores as a table too', { props: { found, samples: part, pair, names: sideNames, narrow: true } }, async ({ press, text }) => {
+    holds(ComponentScores, 'gives each sample\'s scores as a table too', { props: { found, samples: part, pair, names: sideNames, narrow: true, basis: 'log2 of 60 features.' } }, async ({ press, text }) => {
       await press('Show as table')
       expect(document.querySelectorAll('tbody tr')).toHaveLength(6)
       expect(text()).toContain('M1Millrace')
@@ -164,7 +164,7 @@ export const benchRows: ComponentRows = {
     }),
   ],
   'comparison/SampleValues': [
-    holds(SampleValues, 'tells the values in words, and as a table on wish', { props: { values, names: sideNames } }, async ({ find, control, press }) => {
+    holds(SampleValues, 'tells the values in words, and as a table on wish', { props: { values, names: sideNames, feature: 'm/z 301.1' } }, async ({ find, control, press }) => {
       expect(find('[role=img]').attributes('aria-label')).toContain('Tallow Lane: found in 0 of 3')
       await press('Show as table')
       expect(control('Hide the table').attributes('aria-expanded')).toBe('true')

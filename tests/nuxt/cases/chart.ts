@@ -54,6 +54,7 @@ export const chartRows: ComponentRows = {
       expect(find('div[style]').attributes('style')).toMatch(/right: 112px; top: 52px/)
     }),
   ],
+  'chart/SaveFigure': { test: 'tests/nuxt/chart/SaveFigure.test.ts' },
   'chart/MassErrorChart': [
     holds(MassErrorChart, 'tells offset and error of each table', { props: { tables: [{ sampleName: 'M1', offsetPpm: 2.36, offsetApplied: true, residualMedianPpm: 0.8 }, { sampleName: 'M2', offsetPpm: 0, offsetApplied: false, residualMedianPpm: null }] } }, async ({ press, text }) => {
       expect(text()).toContain('A mass offset was taken out of 1 table: M1 +2.4 ppm.')

@@ -13,7 +13,7 @@ export const inventedVersionLine: VersionLine = {
 }
 
 export const inventedVersion: ComparisonDetail['version'] = {
-  ...inventedVersionLine, id: 'v2', settings: judged.settings, samples: [...judged.input.samples], engineVersion: '3', polarity: 'negative', massKind: 'mz',
+  ...inventedVersionLine, id: 'v2', settings: judged.settings, samples: [...judged.input.samples], engineVersion: '3', polarity: 'negative', massKind: 'mz', alignMassPpm: 10,
   cautions: [], tables: [], sheetChanges: [], traces: [], traceChanges: [],
 }
 
@@ -28,6 +28,6 @@ export const inventedComparisonLine: ComparisonLine = {
 
 /** What the bench of that version shows, without raw data. */
 export const inventedSource: BenchSource = {
-  title: inventedComparison.title, version: inventedVersion, exportNotes: () => ['As invented.'],
+  title: inventedComparison.title, study: 'Two apple juices', version: inventedVersion, exportNotes: () => ['As invented.'],
   loadVerdicts: async () => judged.result, loadData: async () => judged.input, loadTraces: null, loadExtracted: null,
 }

@@ -21,7 +21,7 @@ export async function seeCase(one: ComponentCase, went: unknown[]) {
   const said = (['warn', 'error'] as const).map(name => vi.spyOn(console, name).mockImplementation(() => {}))
   const wordsSaid = () => said.flatMap(({ mock }) => mock.calls.map(([first]) => String(first)))
   const asked: AskedRequest[] = []
-  const person = { id: 'p1', name: 'Ada Moss', signInName: 'ada', roles: one.roles ?? [...allRoles] }
+  const person = { id: 'p1', name: 'Ada Moss', signInName: 'ada', roles: one.roles ?? [...allRoles], benchKeys: true }
   const silence = Object.entries({ '/api/me': { person, demo: false, first: false }, ...one.answers }).map(([address, answer]) => answerAt(address, answer, asked))
   clearNuxtData()
   clearNuxtState()

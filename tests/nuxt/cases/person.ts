@@ -132,6 +132,7 @@ export const personRows: ComponentRows = {
       expect(emitted('reopen')).toHaveLength(1)
     }),
   ],
+  'person/BenchKeysField': { test: 'tests/nuxt/comparison/benchKeys.test.ts' },
   'person/ProfileForm': [
     holds(ProfileForm, 'saves a changed name only', { props: { name: 'Ada Moss' }, answers: { 'PATCH /api/me': {} } }, async ({ control, fill, send, find, asked, until }) => {
       expect(control('Save the name').attributes('disabled')).toBe('')

@@ -10,7 +10,8 @@ const rows = Int32Array.from({ length: 300 }, (_, i) => 299 - i)
 const names = { a: 'Millrace', b: 'Tallow Lane' }
 const source: BenchSource = {
   title: 'Apple juices',
-  version: { number: 2, sideAName: 'Millrace', sideBName: 'Tallow Lane', counts: many.result.counts, settings: many.settings, samples: [], cautions: [], engineVersion: '7', polarity: 'negative', massKind: 'mz' },
+  study: null,
+  version: { number: 2, sideAName: 'Millrace', sideBName: 'Tallow Lane', counts: many.result.counts, settings: many.settings, samples: [], cautions: [], engineVersion: '7', polarity: 'negative', massKind: 'mz', alignMassPpm: 10, createdAt: '2026-02-03T11:30:00.000Z' },
   exportNotes: () => [],
   loadVerdicts: () => Promise.resolve(many.result),
   loadData: null,
@@ -18,7 +19,7 @@ const source: BenchSource = {
   loadExtracted: null,
 }
 const mountSection = (csvAddress: string | null = '/verdicts.csv') => mountSuspended(FeatureSection, {
-  props: { source, capabilities: { save: false, csvAddress }, result: many.result, isPreview: false, rows, total: 300, selectedRow: -1, settings: many.settings, names, flags: new Map(), cautions: ['Few replicates.'] },
+  props: { source, capabilities: { save: false, csvAddress, saveFigures: false }, result: many.result, isPreview: false, rows, total: 300, selectedRow: -1, settings: many.settings, names, flags: new Map(), cautions: ['Few replicates.'] },
 })
 const copy = async (section: Awaited<ReturnType<typeof mountSection>>) => {
   let text = ''
