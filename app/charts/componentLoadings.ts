@@ -3,10 +3,9 @@ import type { SampleComponents } from '#shared/science/components/sampleComponen
 import { VERDICT, type Verdict } from '#shared/science/verdict/verdicts'
 import type { Palette } from '#shared/tokens'
 import { chartText } from '~/charts/axis'
-import { along, axisNumber, componentAxis, componentGrid, componentHint, componentTitle, zeroLines } from '~/charts/componentAxis'
-import { escapeMarkup } from '~/charts/escapeMarkup'
+import { along, axisNumber, componentAxis, componentGrid, componentTitle, zeroLines } from '~/charts/componentAxis'
+import type { LoadingFrame } from '~/charts/loadingFrame'
 import { verdictMarks } from '~/charts/verdictMarks'
-import type { PlotWindow } from '~/utils/plotWindow'
 
 /** Loadings on two components, in the order of `features`. */
 export interface LoadingPoints {
@@ -33,17 +32,6 @@ export function loadingPoints(found: SampleComponents, rows: Int32Array, across:
   }
 }
 
-/** The surroundings of a feature: an eighth of the plot to each side; null where it is not on it. */
-export function aroundLoading({ features, x, y }: LoadingPoints, feature: number): PlotWindow | null {
-  const k = features.indexOf(feature)
-  if (k < 0) return null
-  const ends = (values: Float64Array): [number, number] => {
-    const half = (values.reduce((high, value) => Math.max(high, value)) - values.reduce((low, value) => Math.min(low, value))) / 8 || 0.01
-    return [values[k]! - half, values[k]! + half]
-  }
-  return { x: ends(x), y: ends(y) }
-}
-
 /** One drawn series and the features behind its points. */
 export interface LoadingSeries { option: ScatterSeriesOption, features: Int32Array }
 
@@ -61,44 +49,35 @@ export function loadingSeries({ features, x, y }: LoadingPoints, verdict: Uint8A
       data[2 * at] = x[k]!
       data[2 * at + 1] = y[k]!
     })
-    return verdictMarks(name, palette).map((mark, part): LoadingSeries => ({
+    return verdictMarks(name, palette, features.length).map((mark, part): LoadingSeries => ({
       features: own.map(k => features[k]!),
-      option: { ...mark, type: 'scatter', id: `loading-${name}-${part}`, name, data, dimensions: ['x', 'y'], large: true, largeThreshold: 0, progressive: 0, animation: false, emphasis: { disabled: true } },
+      option: { ...mark, type: 'scatter', id: `loading-${name}-${part}`, name, data, dimensions: ['x', 'y'], large: true, largeThreshold: 0, progressive: 0, animation: false, silent: true, emphasis: { disabled: true } },
     }))
   })
 }
 
 export interface LoadingsOptionInput {
   found: SampleComponents
+  frame: LoadingFrame
   series: readonly LoadingSeries[]
   across: number
   upwards: number
   palette: Palette
-  /** What the mark of a feature says under the pointer; plain lines, escaped here. */
-  hint: (feature: number) => string[]
-  narrow: boolean
-  /** The part that is shown; null: all of it. */
-  shown: PlotWindow | null
 }
 
-/** How each feature weighs in two components. */
-export function loadingsOption({ found, series, across, upwards, palette, hint, narrow, shown }: LoadingsOptionInput): EChartsOption {
-  const limits = (ends: [number, number] | undefined) => ends ? { min: ends[0], max: ends[1], axisLabel: { ...chartText(palette), showMinLabel: false, showMaxLabel: false, formatter: axisNumber } } : {}
+/** How each feature weighs in two components. The drawing answers no pointer: what lies over it does. */
+export function loadingsOption({ found, frame, series, across, upwards, palette }: LoadingsOptionInput): EChartsOption {
+  const { pane, interval } = frame
+  const limits = (ends: [number, number], step: number | undefined) => ({
+    min: ends[0], max: ends[1], ...(step === undefined ? { axisLabel: { ...chartText(palette), formatter: axisNumber, showMinLabel: false, showMaxLabel: false } } : { interval: step }),
+  })
   return {
     animation: false,
     aria: { enabled: false },
     textStyle: chartText(palette),
-    grid: componentGrid(palette),
-    xAxis: { ...componentAxis(palette, `loading on ${componentTitle(found, across)}`, { gap: 26, narrow }), ...limits(shown?.x) },
-    yAxis: { ...componentAxis(palette, `loading on ${componentTitle(found, upwards)}`, { gap: 40, narrow: false }), ...limits(shown?.y) },
-    tooltip: {
-      ...componentHint(palette),
-      formatter: (parameters) => {
-        const mark = Array.isArray(parameters) ? parameters[0] : parameters
-        const feature = series.find(each => each.option.id === mark?.seriesId)?.features[mark?.dataIndex ?? -1]
-        return feature === undefined ? '' : hint(feature).map(escapeMarkup).join('<br>')
-      },
-    },
+    grid: { ...componentGrid(palette), left: pane.left, top: pane.top, width: pane.width, height: pane.height },
+    xAxis: { ...componentAxis(palette, `loading on ${componentTitle(found, across)}`, { gap: 26, narrow: false }), ...limits(pane.x, interval?.x) },
+    yAxis: { ...componentAxis(palette, `loading on ${componentTitle(found, upwards)}`, { gap: 40, narrow: false }), ...limits(pane.y, interval?.y) },
     series: [
       // Lines need a series of their own: large ones draw nothing else.
       { type: 'scatter', id: 'zero', silent: true, animation: false, data: [], markLine: zeroLines(palette) },

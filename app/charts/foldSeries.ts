@@ -2,7 +2,7 @@ import type { ScatterSeriesOption } from 'echarts/charts'
 import type { Palette } from '#shared/tokens'
 import { COUNTED_VERDICTS, VERDICT, type Verdict } from '#shared/science/verdict/verdicts'
 import { PLACE, type FoldPoints } from '~/charts/foldPoints'
-import { verdictLooks } from '~/charts/verdictLook'
+import { verdictMarks } from '~/charts/verdictMarks'
 
 /** One drawn series and the features behind its points. */
 export interface FoldSeries { option: ScatterSeriesOption, features: Int32Array }
@@ -11,14 +11,10 @@ export interface FoldSeries { option: ScatterSeriesOption, features: Int32Array 
 const DRAWN: readonly Verdict[] = ['setAside', 'unsettled', 'level', 'moreA', 'moreB', 'onlyA', 'onlyB']
 const GRIDS = [PLACE.ratios, PLACE.laneA, PLACE.laneB] as const
 
-/** So many marks and more are drawn smaller, or they hide each other; below 4 px the drawing library fills squares, whatever the shape. */
-const CROWDED = 8000
-
-/** One series a verdict and grid, of the features among `rows`; a cross is two thin bars, since large series know only simple shapes. */
+/** One series a verdict and grid, of the features among `rows`. */
 export function foldSeries(points: FoldPoints, verdict: Uint8Array, rows: Int32Array, palette: Palette): FoldSeries[] {
   const series: FoldSeries[] = []
   const groups = groupRows(points, verdict, rows)
-  const smaller = rows.length >= CROWDED ? 0.75 : 1
   for (const name of DRAWN) {
     GRIDS.forEach((place, grid) => {
       const features = groups.get(groupOf(VERDICT[name], place))
@@ -28,7 +24,7 @@ export function foldSeries(points: FoldPoints, verdict: Uint8Array, rows: Int32A
         data[2 * at] = points.x[feature]!
         data[2 * at + 1] = points.y[feature]!
       })
-      marks(name, palette, smaller).forEach((mark, part) => series.push({
+      verdictMarks(name, palette, rows.length).forEach((mark, part) => series.push({
         features,
         option: { ...mark, type: 'scatter', id: `${name}-${grid}-${part}`, name, xAxisIndex: grid, yAxisIndex: grid, data, dimensions: ['x', 'y'], large: true, largeThreshold: 0, progressive: 0, animation: false, silent: true, emphasis: { disabled: true } },
       }))
@@ -56,18 +52,6 @@ function groupRows({ place }: FoldPoints, verdict: Uint8Array, rows: Int32Array)
     filled.set(group, at + 1)
   }
   return groups
-}
-
-function marks(name: Verdict, palette: Palette, smaller: number): Pick<ScatterSeriesOption, 'symbol' | 'symbolSize' | 'itemStyle'>[] {
-  const { shape, colour } = verdictLooks[name]
-  const color = palette[colour]
-  switch (shape) {
-    case 'circle': return [{ symbol: 'circle', symbolSize: 6 * smaller, itemStyle: { color, opacity: 0.85 } }]
-    case 'square': return [{ symbol: 'rect', symbolSize: 5 * smaller, itemStyle: { color, opacity: 0.85 } }]
-    case 'dash': return [{ symbol: 'rect', symbolSize: [7 * smaller, 2], itemStyle: { color, opacity: 0.75 } }]
-    case 'ring': return [{ symbol: 'circle', symbolSize: Math.max(4, 5 * smaller), itemStyle: { color: 'transparent', borderColor: color, borderWidth: 1.2, opacity: 0.75 } }]
-    case 'cross': return ([[1.2, 5], [5, 1.2]] as const).map(([width, height]) => ({ symbol: 'rect', symbolSize: [width, height], itemStyle: { color, opacity: 0.75 } }))
-  }
 }
 
 /** Flagged features once more, ringed; few, so they are drawn one by one. */

@@ -4,6 +4,9 @@ import { addBenchStudy } from '../support/benchStudy'
 import { launchBrowser } from '../support/browser'
 import { startBuiltServer } from '../support/builtServer'
 import { openBench, signInPage } from '../support/openBench'
+import { seededRandom } from '../support/seededRandom'
+import { shareOf } from './measure'
+import { traceFrames } from './traceFrames'
 
 const samples = Number(process.argv[2] ?? 100)
 const features = Number(process.argv[3] ?? 50_000)
@@ -34,6 +37,13 @@ async function run() {
       await basis(words)
       console.log(`  ${scaling}: ${((performance.now() - start) / 1000).toFixed(2)} s, ${Math.round(await page.evaluate<number>('window.longestFrameMs'))} ms`)
     }
+    const box = await part.locator('figure canvas').last().boundingBox()
+    if (!box) throw new Error('No loadings are drawn.')
+    const { uniform } = seededRandom(5)
+    const { milliseconds, busy } = await traceFrames(browser, page, async () => {
+      for (let way = 0; way < 12; way++) await page.mouse.move(box.x + box.width * (0.2 + 0.7 * uniform()), box.y + box.height * (0.1 + 0.7 * uniform()), { steps: 40 })
+    })
+    console.log(`  hovering over the loadings: 95 % of ${milliseconds.length} frames within ${shareOf(milliseconds, 0.95).toFixed(1)} ms, longest ${Math.max(...milliseconds).toFixed(1)} ms; computed a frame: 95 % within ${shareOf(busy, 0.95).toFixed(1)} ms`)
   }
   finally {
     await browser.close()

@@ -2,7 +2,10 @@ import { mountSuspended } from '@nuxt/test-utils/runtime'
 import { enableAutoUnmount, flushPromises } from '@vue/test-utils'
 import { afterEach, beforeEach, describe, expect, it, vi } from 'vitest'
 import BenchPlot from '~/components/comparison/BenchPlot.vue'
+import { farthestLoadings } from '~/charts/componentLoadingsText'
+import { loadingMark } from '~/charts/loadingFrame'
 import ComponentsPlot from '~/components/comparison/ComponentsPlot.vue'
+import LoadingsOverlay from '~/components/comparison/LoadingsOverlay.vue'
 import { sampleComponents } from '#shared/science/components/sampleComponents'
 import { initialView } from '~/utils/benchView'
 import type { ComponentsReport, ComponentsWork } from '~/utils/componentsWork'
@@ -87,13 +90,38 @@ describe('the plot of principal components', () => {
     expect(feature?.attributes('aria-pressed')).toBe('true')
   })
 
-  it('selects the feature whose mark is clicked', async () => {
+  it('hints at the mark under the pointer, selects the one that is clicked, picks a second one beside it', async () => {
     const plot = await mountPlot()
     await lastWorker().answer()
-    const loadings = plot.findAllComponents({ name: 'ChartFrame' })[1]
-    loadings?.vm.$emit('pick', { seriesId: 'loading-level-0', dataIndex: 2 })
-    const { selected } = useBenchStore()
-    expect(many.result.columns.verdict[selected ?? -1]).toBe(5)
+    const overlay = plot.getComponent(LoadingsOverlay)
+    const { frame, points } = overlay.props()
+    const [first = -1, second = -1] = farthestLoadings(points, 2).map(({ feature }) => feature)
+    const at = (feature: number) => {
+      const mark = loadingMark(frame, points, feature)
+      return { clientX: mark?.x, clientY: mark?.y }
+    }
+    await overlay.trigger('pointermove', at(first))
+    expect(overlay.text()).toContain(`m/z ${many.input.mz[first]?.toFixed(4)}`)
+    await overlay.trigger('click', at(first))
+    expect(useBenchStore().selected).toBe(first)
+    await overlay.trigger('click', { ...at(second), ctrlKey: true })
+    expect(useBenchStore().looked).toEqual([first, second])
+    expect(overlay.findAll('circle')).toHaveLength(3)
+    await overlay.trigger('click', { clientX: 1, clientY: 1 })
+    expect(useBenchStore().selected).toBe(first)
+  })
+
+  it('closes up on the selected feature, and back', async () => {
+    const plot = await mountPlot()
+    await lastWorker().answer()
+    const { points, frame: whole } = plot.getComponent(LoadingsOverlay).props()
+    useBenchStore().select(points.features[3] ?? null)
+    useBenchStore().closeUp = true
+    await flushPromises()
+    const { frame } = plot.getComponent(LoadingsOverlay).props()
+    expect(frame.pane.x[1] - frame.pane.x[0]).toBeLessThan(whole.pane.x[1] - whole.pane.x[0])
+    await plot.findAll('button').find(button => button.text() === 'Whole plot')?.trigger('click')
+    expect(useBenchStore().closeUp).toBe(false)
   })
 
   it('lets further samples take part, without sending the intensities again', async () => {
@@ -158,7 +186,7 @@ describe('the plot of principal components', () => {
 describe('its tab', () => {
   it('is there, and waits for the intensities', async () => {
     useBenchStore().plot = 'components'
-    const plot = await mountSuspended(BenchPlot, { props: { ...props, data: null, flagged: new Set<number>() } })
+    const plot = await mountSuspended(BenchPlot, { props: { ...props, data: null, saved: many.settings, draft: null, flagged: new Set<number>() } })
     expect(plot.findAll('[role=tab]').map(tab => tab.text())).toContain('Components')
     expect(plot.text()).toContain('Reading the intensities')
     expect(HeldWorker.made).toHaveLength(0)

@@ -1,7 +1,8 @@
 import { describe, expect, it } from 'vitest'
 import { componentTitle } from '../../../app/charts/componentAxis'
-import { aroundLoading, loadingPoints, loadingSeries, loadingsOption } from '../../../app/charts/componentLoadings'
+import { loadingPoints, loadingSeries, loadingsOption } from '../../../app/charts/componentLoadings'
 import { farthestLoadings, loadingsText } from '../../../app/charts/componentLoadingsText'
+import { aroundLoading, loadingFrame, loadingMark, loadingMarks } from '../../../app/charts/loadingFrame'
 import { componentSamples, samplesByGroup } from '../../../app/charts/componentSamples'
 import { scoreGroups, scoresOption } from '../../../app/charts/componentScores'
 import { ellipseSentence, scoresText } from '../../../app/charts/componentScoresText'
@@ -115,11 +116,33 @@ describe('the plot of loadings', () => {
     expect([data[4], data[5]]).toEqual([found.loadings[0]?.[k], found.loadings[1]?.[k]])
   })
 
-  it('hints at the feature under the pointer', () => {
-    const option = loadingsOption({ found, series, across: 1, upwards: 2, palette: light, narrow: false, shown: null, hint: feature => [`<${feature}>`] })
-    const { formatter } = option.tooltip as { formatter: (mark: object) => string }
-    expect(formatter({ seriesId: series[0]?.option.id, dataIndex: 1 })).toBe(`&lt;${series[0]?.features[1]}&gt;`)
-    expect(formatter({ seriesId: 'zero', dataIndex: 0 })).toBe('')
+  it('finds the feature under the pointer, where it is drawn', () => {
+    const frame = loadingFrame(points, 440, null)
+    const marks = loadingMarks(frame, points)
+    for (const k of [0, 5, points.features.length - 1]) {
+      const feature = points.features[k] ?? -1
+      const mark = loadingMark(frame, points, feature)
+      if (!mark) throw new Error('not drawn')
+      expect(mark.x).toBeGreaterThan(frame.pane.left)
+      expect(mark.x).toBeLessThan(frame.pane.left + frame.pane.width)
+      const found = loadingMark(frame, points, marks.nearest(mark.x, mark.y, 12))
+      expect(Math.hypot((found?.x ?? 0) - mark.x, (found?.y ?? 0) - mark.y)).toBeLessThan(0.01)
+    }
+    expect(marks.nearest(0, 0, 12)).toBe(-1)
+    expect(loadingMark(frame, points, -1)).toBeNull()
+  })
+
+  it('has axes that hold zero and every loading, and end on marks', () => {
+    for (const width of [300, 440, 900]) {
+      const { pane, interval } = loadingFrame(points, width, null)
+      for (const [ends, values, step] of [[pane.x, points.x, interval?.x ?? 0], [pane.y, points.y, interval?.y ?? 0]] as const) {
+        expect(ends[0]).toBeLessThanOrEqual(Math.min(0, ...values))
+        expect(ends[1]).toBeGreaterThanOrEqual(Math.max(0, ...values))
+        for (const end of ends) expect(Math.abs(end / step - Math.round(end / step))).toBeLessThan(1e-6)
+        expect((ends[1] - ends[0]) / step).toBeLessThan(12)
+      }
+    }
+    expect(loadingFrame({ x: Float64Array.of(), y: Float64Array.of(0) }, 0, null).pane.x.every(Number.isFinite)).toBe(true)
   })
 
   it('shows the surroundings of a feature, and none of one that takes no part', () => {
@@ -127,8 +150,17 @@ describe('the plot of loadings', () => {
     const shown = aroundLoading(points, feature)
     expect(shown?.x[0]).toBeLessThan(points.x[5] ?? 0)
     expect(shown?.x[1]).toBeGreaterThan(points.x[5] ?? 0)
-    expect(loadingsOption({ found, series, across: 1, upwards: 2, palette: light, narrow: false, shown, hint: () => [] }).xAxis).toMatchObject({ min: shown?.x[0], max: shown?.x[1] })
+    const frame = loadingFrame(points, 440, shown)
+    expect(loadingsOption({ found, frame, series, across: 1, upwards: 2, palette: light }).xAxis).toMatchObject({ min: shown?.x[0], max: shown?.x[1] })
+    expect(loadingMark(frame, points, feature)?.x).toBeCloseTo(frame.pane.left + frame.pane.width / 2, 6)
     expect(aroundLoading(points, -1)).toBeNull()
+  })
+
+  it('is drawn where the pointer looks for it', () => {
+    const frame = loadingFrame(points, 440, null)
+    const option = loadingsOption({ found, frame, series, across: 1, upwards: 2, palette: light })
+    expect(option.grid).toMatchObject({ left: frame.pane.left, top: frame.pane.top, width: frame.pane.width, height: frame.pane.height })
+    expect(option.yAxis).toMatchObject({ min: frame.pane.y[0], max: frame.pane.y[1] })
   })
 
   it('ranks by distance from the middle, and names the farthest in words', () => {
