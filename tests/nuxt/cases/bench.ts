@@ -97,7 +97,7 @@ export const benchRows: ComponentRows = {
     }),
   ],
   'comparison/ComponentLoadings': [
-    holds(ComponentLoadings, 'names the farthest features, each to be selected', { props: { found, columns: result.columns, rows, sampleCount: part.length, pair, foldLimit: 1, names: sideNames, narrow: false, basis: 'log2 of 60 features.' } }, async ({ press }) => {
+    holds(ComponentLoadings, 'names the farthest features, each to be selected', { props: { found, columns: result.columns, rows, sampleCount: part.length, pair, foldLimit: 1, names: sideNames, basis: 'log2 of 60 features.' } }, async ({ press }) => {
       await press('Show as table')
       const first = document.querySelector<HTMLElement>('tbody button')
       first?.click()
@@ -144,6 +144,7 @@ export const benchRows: ComponentRows = {
     }),
   ],
   'comparison/GroupMark': [holds(GroupMark, 'is a mark without a word of its own', { props: { group: 'B' } }, ({ find }) => expect(find('svg').attributes('aria-hidden')).toBe('true'))],
+  'comparison/LoadingsOverlay': own('componentsPlot'),
   'comparison/MassField': [
     holds(MassField, 'takes a mass with the usual tolerance, and lets it go', { props: { label: 'm/z', usualPpm: 10, modelValue: null } }, async ({ fill, find, emitted }) => {
       await fill('at', '301,1')
