@@ -3,7 +3,7 @@ import { frozenThatFit } from '~/utils/columnLayout'
 import { chosenColumns, featureColumns, type ColumnSources } from '~/utils/featureColumns'
 
 /** Beside frozen columns so much of the frame stays free to scroll in. */
-const LEAST_FREE_REM = 8
+const LEAST_FREE_REM = 7
 
 /** The columns of the feature table as chosen, for the rows, for copies and exports. */
 export function useTableColumns(sources: () => ColumnSources | null) {

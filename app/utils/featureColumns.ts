@@ -54,7 +54,7 @@ export function featureColumns({ result, foldLimit, names, masses, flags }: Colu
   const neutral = Float64Array.from(c.mz, mz => mz - (plain?.mz ?? 0))
   const method = (i: number) => c.method[i] === METHOD.welch ? 'Welch t' : c.method[i] === METHOD.assumed ? 'assumed precision' : ''
   return [
-    { id: 'flags', label: 'flags', title: 'flags', widthRem: 3.25, isNumber: false, sort: 'flags', cell: i => flagWords(flags.get(i)), exact: i => (flags.get(i) ?? []).map(flag => `${flagKindNames[flag.kind]}: ${flag.reason}`).join('; ') },
+    { id: 'flags', label: 'flags', title: 'flags', widthRem: 4, isNumber: false, sort: 'flags', cell: i => flagWords(flags.get(i)), exact: i => (flags.get(i) ?? []).map(flag => `${flagKindNames[flag.kind]}: ${flag.reason}`).join('; ') },
     { id: 'number', label: '#', title: 'feature', widthRem: 4, isNumber: true, sort: 'number', cell: i => String(i + 1), exact: i => i + 1 },
     number('mz', 'm/z', 'm/z', 6, c.mz, formatMz),
     number('minutes', 'min', 'retention time (min)', 4, c.retentionMinutes, formatMinutes),
@@ -91,7 +91,10 @@ export function chosenColumns(all: readonly FeatureColumn[], shown: readonly Col
 function fitColumn({ what, of }: AskedIons, mz: Float64Array): FeatureColumn {
   const words = (i: number) => {
     const fit = of(mz[i]!)
-    return fit ? `${adductWords(fit.adduct)} ${fit.errorPpm > 0 ? '+' : ''}${formatPpm(fit.errorPpm)} ppm` : NO_NUMBER
+    if (!fit) return NO_NUMBER
+    // No error of −0.0.
+    const ppm = Number(fit.errorPpm.toFixed(1)) + 0
+    return `${adductWords(fit.adduct)} ${ppm > 0 ? '+' : ''}${formatPpm(ppm)} ppm`
   }
   return { id: 'fit', label: `m/z fits ${what}`, title: `m/z fits ${what} as (not an identification)`, widthRem: 13, isNumber: false, sort: null, cell: words, exact: words }
 }

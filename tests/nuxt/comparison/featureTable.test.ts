@@ -135,7 +135,7 @@ describe('the feature table', () => {
     const { table } = await mountTable()
     const cells = table.get('[role=row][aria-rowindex="2"]').findAll('[role=gridcell]')
     expect(cells.map(cell => cell.classes().includes('sticky')).lastIndexOf(true)).toBe(2)
-    expect(cells[2]?.attributes('style')).toContain('left: 7.25rem')
+    expect(cells[2]?.attributes('style')).toContain('left: 8rem')
   })
 })
 

@@ -36,6 +36,8 @@ describe('the columns of the feature table', () => {
     expect(chosen.map(({ id }) => id).slice(0, 5)).toEqual(['flags', 'number', 'mz', 'fit', 'minutes'])
     expect(chosen[3]?.cell(0)).toBe('[M−H]⁻ +0.1 ppm')
     expect(chosen[3]?.cell(1)).toBe('–')
+    const below = chosenColumns(all, ['mz'], 1, { asked, result: { ...many.result, columns: { ...c, mz: Float64Array.of(435.12966) } } })
+    expect(below[1]?.cell(0)).toBe('[M−H]⁻ 0.0 ppm')
   })
 
   it('say in full on hover what a cell shortens', () => {
