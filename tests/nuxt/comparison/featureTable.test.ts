@@ -56,6 +56,13 @@ describe('the feature table', () => {
     expect(header('min')?.attributes('aria-sort')).toBeUndefined()
   })
 
+  it('tells the full value of a cell on hover', async () => {
+    const { table } = await mountTable()
+    const row = table.get('[aria-rowindex="2"]')
+    await row.trigger('mouseover')
+    expect(row.findAll('[role=gridcell]').map(cell => cell.attributes('title'))).toContain(String(result.columns.mz[0]))
+  })
+
   it('moves and selects by keys', async () => {
     const { press } = await mountTable()
     for (const [key, selected] of [['ArrowDown', 0], ['ArrowDown', 1], ['ArrowUp', 0], ['End', 499], ['Home', 0]] as const) {
