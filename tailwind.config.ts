@@ -27,6 +27,7 @@ export default {
       ':root': { ...variables(light), 'color-scheme': 'light' },
       ':root[data-scheme=dark]': { ...variables(dark), 'color-scheme': 'dark' },
       '@media (prefers-color-scheme: dark)': { ':root:not([data-scheme=light])': { ...variables(dark), 'color-scheme': 'dark' } },
+      '@media print': { ':root, :root[data-scheme], :root:not([data-scheme=light])': { ...variables({ ...light, paper: light.panel }), 'color-scheme': 'light' } },
     }),
   ],
 } satisfies Config

@@ -12,6 +12,7 @@ import FeatureSheet from '~/components/comparison/FeatureSheet.vue'
 import FormulaField from '~/components/comparison/FormulaField.vue'
 import GroupMark from '~/components/comparison/GroupMark.vue'
 import MassField from '~/components/comparison/MassField.vue'
+import PrintHead from '~/components/comparison/PrintHead.vue'
 import RangeField from '~/components/comparison/RangeField.vue'
 import SampleValues from '~/components/comparison/SampleValues.vue'
 import SampleValueTable from '~/components/comparison/SampleValueTable.vue'
@@ -128,7 +129,17 @@ export const benchRows: ComponentRows = {
   ],
   'comparison/FeatureSheet': [
     holds(FeatureSheet, 'says what to do while nothing is selected', { props: { open: false }, slots: { default: () => 'card' } }, ({ text }) => expect(text()).toContain('Select a feature')),
-    holds(FeatureSheet, 'holds the card', { props: { open: true }, slots: { default: () => 'card' } }, ({ find }) => expect(find('aside').text()).toBe('card')),
+    holds(FeatureSheet, 'holds the card', { props: { open: true }, slots: { default: () => 'card' } }, async ({ text, press, control, find }) => {
+      expect(text()).toContain('card')
+      await press('Put the card away')
+      expect(control('Show the feature card').attributes('aria-expanded')).toBe('false')
+      expect(find(`[id="${control('Show the feature card').attributes('aria-controls')}"]`).classes()).toContain('max-[899px]:hidden')
+    }),
+  ],
+  'comparison/PrintHead': [
+    holds(PrintHead, 'says where a printed page comes from, under which limits and filter', { props: { savedAt: '2026-02-03T11:30:00.000Z', context: { file: [], sides: ['A Millrace: 3 preparations'], settings: ['Reach limit: ×3'], filter: 'none', origin: 'Juices; version 2', engineVersion: '4', cautions: ['Screening indication only.', 'Few replicates.'] } } }, ({ text }) => {
+      expect(text()).toMatch(/Juices; version 2.*Saved 3 Feb 2026. Printed \d+ \w+ \d{4}. Engine 4.*Reach limit: ×3.*Filter: none.*Screening/)
+    }),
   ],
   'comparison/FilterChips': own('featureFilters'),
   'comparison/FilterPanel': own('featureFilters'),
