@@ -22,8 +22,8 @@ afterAll(async () => {
   if (study) rmSync(study.folder, { recursive: true, force: true })
 })
 
-async function onBench(query: string, act: (page: Page) => Promise<void>, signInName = 'analyst') {
-  const watched = await watchedPage(browser, {})
+async function onBench(query: string, act: (page: Page) => Promise<void>, { signInName = 'analyst', width = 1440 } = {}) {
+  const watched = await watchedPage(browser, { width })
   try {
     await signInPage(watched.page, server.url, signInName)
     await openBench(watched.page, server.url, study, query)
@@ -82,5 +82,33 @@ describe('figures', () => {
   it('are not offered to who may not export', () => onBench('?feature=12', async (page) => {
     await page.getByText('Values per sample').waitFor()
     expect(await page.getByRole('button', { name: 'SVG' }).count()).toBe(0)
-  }, 'student'))
+  }, { signInName: 'student' }))
+})
+
+describe('the card on a phone', () => {
+  it('does not lie over what has the focus, and can be put away', () => onBench('?feature=12', async (page) => {
+    const sheet = page.getByRole('complementary', { name: 'Feature card' })
+    const help = page.getByRole('button', { name: 'Keys of the bench (?)' })
+    await sheet.getByRole('button', { name: 'Put the card away' }).waitFor()
+    await help.focus()
+    await expect.poll(async () => {
+      const [focused, over] = [await help.boundingBox(), await sheet.boundingBox()]
+      return focused !== null && over !== null && focused.y + focused.height <= over.y
+    }).toBe(true)
+    await sheet.getByRole('button', { name: 'Put the card away' }).click()
+    await expect.poll(() => page.getByText('Values per sample').first().isVisible()).toBe(false)
+    await sheet.getByRole('button', { name: 'Show the feature card' }).click()
+    await page.getByText('Values per sample').first().waitFor()
+  }, { width: 390 }))
+})
+
+describe('the printed bench', () => {
+  it('says where it comes from, and has nothing to press', () => onBench('?feature=12&verdict=onlyA', async (page) => {
+    await page.emulateMedia({ media: 'print' })
+    await page.getByText(/“Millrace against Tallow Lane”; version 2/).waitFor()
+    await page.getByText(/Rows in view: 1 to \d+ of \d+/).waitFor()
+    expect(await page.getByRole('tab').count()).toBe(0)
+    expect(await page.getByRole('textbox').count()).toBe(0)
+    expect(await page.getByRole('button', { name: 'Show as table' }).count()).toBe(0)
+  }))
 })
