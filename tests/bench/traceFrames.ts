@@ -16,16 +16,24 @@ const ASK_FOR_FRAMES = `(() => {
   ask()
 })()`
 
+const BEGIN = 'act begins'
+const END = 'act ends'
+
 /** Milliseconds from frame to frame of the page's own thread while `act` is done, and what it computed, by Chromium's tracing. */
 export async function traceFrames(browser: Browser, page: Page, act: () => Promise<void>): Promise<Frames> {
   await page.evaluate(ASK_FOR_FRAMES)
   await page.waitForTimeout(300)
-  await browser.startTracing(page, { categories: ['devtools.timeline', 'toplevel', '__metadata'] })
-  await page.waitForTimeout(100)
+  await browser.startTracing(page, { categories: ['devtools.timeline', 'toplevel', 'blink.user_timing'] })
+  await page.waitForTimeout(500)
+  // Tracing itself makes the page wait as it begins.
+  await page.evaluate(`performance.mark('${BEGIN}')`)
   await act()
+  await page.evaluate(`performance.mark('${END}')`)
   const trace = JSON.parse((await browser.stopTracing()).toString('utf8')) as { traceEvents: TraceEvent[] }
   await page.evaluate('window.askingForFrames = false')
-  const beats = trace.traceEvents.filter(event => event.name === 'FireAnimationFrame')
+  const at = (name: string) => trace.traceEvents.find(event => event.name === name)?.ts ?? Number.NaN
+  const [begin, end] = [at(BEGIN), at(END)]
+  const beats = trace.traceEvents.filter(event => event.name === 'FireAnimationFrame' && event.ts >= begin && event.ts <= end)
   const [first] = beats
   if (!first) throw new Error('The trace has no frame.')
   const own = beats.filter(event => event.pid === first.pid && event.tid === first.tid).map(event => event.ts).sort((a, b) => a - b)
