@@ -9,7 +9,8 @@ export type HeadCommand =
   | { does: 'sort', further: boolean }
   | { does: 'menu' | 'leave' }
 
-type Pressed = Pick<KeyboardEvent, 'key' | 'ctrlKey' | 'metaKey' | 'altKey' | 'shiftKey'>
+/** What counts of a keyboard event. */
+interface Pressed { key: string, ctrlKey: boolean, metaKey: boolean, altKey: boolean, shiftKey: boolean }
 
 const MOVES: Readonly<Record<string, readonly ['row' | 'page' | 'edge', 1 | -1]>> = {
   ArrowDown: ['row', 1], ArrowUp: ['row', -1], PageDown: ['page', 1], PageUp: ['page', -1], End: ['edge', 1], Home: ['edge', -1],
