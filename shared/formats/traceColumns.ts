@@ -4,8 +4,6 @@ import { columnOf, packColumns, unpackColumns, type Columns } from './packedColu
 export interface SampleTrace {
   /** Place of its sample among the samples of the version. */
   position: number
-  /** The mzML file it was read from. */
-  fileName: string
   /** Common time of the alignment, ascending. */
   minutes: Float64Array
   /** Counts. */
@@ -22,7 +20,7 @@ export interface ExtractedTrace {
   values: Float64Array
 }
 
-/** Packs the traces of a version's samples; single precision is finer than any drawing. */
+/** Packs the traces of a version's samples, without the names of their files, which guests are not told; single precision is finer than any drawing. */
 export function packSampleTraces(traces: readonly SampleTrace[]): Uint8Array<ArrayBuffer> {
   const columns: Columns = {}
   traces.forEach(({ minutes, total, base }, at) => {
@@ -30,13 +28,13 @@ export function packSampleTraces(traces: readonly SampleTrace[]): Uint8Array<Arr
     columns[`total${at}`] = Float32Array.from(total)
     columns[`base${at}`] = Float32Array.from(base)
   })
-  return packColumns(traces.map(({ position, fileName }) => ({ position, fileName })), columns)
+  return packColumns(traces.map(({ position }) => ({ position })), columns)
 }
 
 /** Reads what packSampleTraces wrote. @throws RangeError where the bytes are something else */
 export function unpackSampleTraces(bytes: ArrayBuffer | Uint8Array): SampleTrace[] {
   const { meta, columns } = unpackColumns(bytes)
-  return (meta as Pick<SampleTrace, 'position' | 'fileName'>[]).map((each, at) => ({
+  return (meta as Pick<SampleTrace, 'position'>[]).map((each, at) => ({
     ...each,
     minutes: columnOf(columns, `minutes${at}`, Float64Array),
     total: Float64Array.from(columnOf(columns, `total${at}`, Float32Array)),

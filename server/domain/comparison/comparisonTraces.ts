@@ -12,7 +12,7 @@ export function comparisonTraces(db: Database, studyId: string, comparisonId: st
 }
 
 /** The extracted traces of some features in these samples, packed. */
-export async function comparisonExtracted(open: { db: Database, folder: string }, studyId: string, comparisonId: string, person: Person, { version: number, features }: ExtractQuery): Promise<Uint8Array> {
+export async function comparisonExtracted(open: { db: Database, folder: string }, studyId: string, comparisonId: string, person: Person, { version: number, features }: ExtractQuery, signal?: AbortSignal): Promise<Uint8Array> {
   const version = findVersion(open.db, findComparison(open.db, studyId, comparisonId, person).id, number)
-  return packedExtractedTraces(open, version.alignmentId, versionTraces(open.db, version), features)
+  return packedExtractedTraces(open, version.alignmentId, versionTraces(open.db, version), features, signal)
 }

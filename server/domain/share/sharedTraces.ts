@@ -13,9 +13,9 @@ export function sharedTraces(db: Database, link: OpenShareLink): Uint8Array {
 }
 
 /** The extracted traces of some features in the same raw data, packed. */
-export async function sharedExtracted(open: { db: Database, folder: string }, link: OpenShareLink, features: readonly number[]): Promise<Uint8Array> {
+export async function sharedExtracted(open: { db: Database, folder: string }, link: OpenShareLink, features: readonly number[], signal?: AbortSignal): Promise<Uint8Array> {
   const { alignmentId, traces } = sharedVersion(open.db, link)
-  return packedExtractedTraces(open, alignmentId, usedTraces(open.db, alignmentId, traces), features)
+  return packedExtractedTraces(open, alignmentId, usedTraces(open.db, alignmentId, traces), features, signal)
 }
 
 function sharedVersion(db: Database, link: OpenShareLink) {

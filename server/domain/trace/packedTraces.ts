@@ -14,11 +14,11 @@ import { readCentroids } from './files/readCentroids'
 export function packedSampleTraces(db: Database, aligned: readonly AlignedTrace[]): Uint8Array {
   const rows = db.select({ id: traces.id, total: traces.total, base: traces.base }).from(traces).where(inArray(traces.id, aligned.map(({ traceId }) => traceId))).all()
   const byId = new Map(rows.map(row => [row.id, row]))
-  return packSampleTraces(aligned.flatMap(({ traceId, position, fileName, scanMinutes }) => {
+  return packSampleTraces(aligned.flatMap(({ traceId, position, scanMinutes }) => {
     const row = byId.get(traceId)
     if (!row) return []
     const { minutes, columns: [total = minutes, base = minutes] } = inTimeOrder(scanMinutes, [unpackFloat64(row.total), unpackFloat64(row.base)])
-    return [{ position, fileName, minutes, total, base }]
+    return [{ position, minutes, total, base }]
   }))
 }
 
@@ -27,13 +27,14 @@ export function packedSampleTraces(db: Database, aligned: readonly AlignedTrace[
  * offset taken out. A trace that does not reach a feature's m/z has none of it.
  *
  * @param features places in the alignment
- * @throws DomainError where the alignment has no such feature
+ * @param signal ends the work where nobody waits for it any more
+ * @throws DomainError where the alignment has no such feature; the signal's reason once it is aborted
  */
-export async function packedExtractedTraces({ db, folder }: { db: Database, folder: string }, alignmentId: string, aligned: readonly AlignedTrace[], features: readonly number[]): Promise<Uint8Array> {
+export async function packedExtractedTraces({ db, folder }: { db: Database, folder: string }, alignmentId: string, aligned: readonly AlignedTrace[], features: readonly number[], signal?: AbortSignal): Promise<Uint8Array> {
   const windows = featureWindows(db, alignmentId, features)
   const extracted: ExtractedTrace[] = []
   // One trace after the other, so that no more than one's points are in memory.
-  for (const trace of aligned) extracted.push(...await extractFrom(folder, trace, windows))
+  for (const trace of aligned) extracted.push(...await extractFrom(folder, trace, windows, signal))
   return packExtractedTraces(extracted)
 }
 
@@ -50,12 +51,13 @@ function featureWindows(db: Database, alignmentId: string, features: readonly nu
   })
 }
 
-async function extractFrom(folder: string, trace: AlignedTrace, windows: readonly FeatureWindow[]): Promise<ExtractedTrace[]> {
+async function extractFrom(folder: string, trace: AlignedTrace, windows: readonly FeatureWindow[], signal?: AbortSignal): Promise<ExtractedTrace[]> {
   const shift = 1 + trace.offsetPpm * 1e-6
   const asMeasured = windows.map(({ feature, lowMz, highMz }) => ({ feature, lowMz: lowMz * shift, highMz: highMz * shift }))
     .filter(({ lowMz, highMz }) => highMz >= trace.lowestMz && lowMz <= trace.highestMz)
   const extracted: ExtractedTrace[] = []
   for (const group of bySlices(asMeasured)) {
+    signal?.throwIfAborted()
     const around = { lowMz: Math.min(...group.map(({ lowMz }) => lowMz)), highMz: Math.max(...group.map(({ highMz }) => highMz)) }
     const points = await readCentroids(folder, trace.traceId, around)
     for (const { feature, ...window } of group) {

@@ -68,7 +68,7 @@ describe('the mirrored chromatogram', () => {
   })
 
   it('draws measured traces of the samples that have them, and names those that have none', async () => {
-    const loadTraces = async () => [0, 3].map(position => ({ position, fileName: 'x.mzML', minutes, total: flat(10), base: flat(4) }))
+    const loadTraces = async () => [0, 3].map(position => ({ position, minutes, total: flat(10), base: flat(4) }))
     const chart = await mountWith({ loadTraces })
     await drawn(chart, 4)
     expect(chart.text()).toContain('Mirrored chromatogram: base peak (BPC)')
@@ -81,7 +81,7 @@ describe('the mirrored chromatogram', () => {
   it('asks for the traces of what is looked at, once', async () => {
     const asked: number[][] = []
     const chart = await mountWith({
-      loadTraces: async () => [{ position: 0, fileName: 'x.mzML', minutes, total: flat(10), base: flat(4) }],
+      loadTraces: async () => [{ position: 0, minutes, total: flat(10), base: flat(4) }],
       loadExtracted: async (features) => {
         asked.push([...features])
         return features.map(feature => ({ position: 0, feature, minutes, values: flat(feature) }))

@@ -49,7 +49,7 @@ function lookInto(fileNames: readonly string[]) {
 describe('the traces of a version', () => {
   it('are those of its samples that have raw data, by their place', () => {
     const found = total()
-    expect(found.map(({ position, fileName }) => [position, fileName])).toEqual([[0, 'M1.mzML'], [2, 'T1.mzML']])
+    expect(found.map(({ position }) => position)).toEqual([0, 2])
     expect([...found[0]?.minutes ?? []]).toEqual([1, 2, 3, 4])
     expect([...found[0]?.total ?? []]).toEqual([11.5, 110.5, 11.5, 11.5])
     expect([...found[1]?.base ?? []]).toEqual([7, 50, 7, 7])
@@ -68,7 +68,7 @@ describe('the traces of a version', () => {
 
   it('give what the version looked into, where it looked into any', () => {
     lookInto(['T1.mzML'])
-    expect(total(2).map(({ fileName }) => fileName)).toEqual(['T1.mzML'])
+    expect(total(2).map(({ position }) => position)).toEqual([2])
     expect(total(1)).toHaveLength(2)
   })
 })
@@ -105,8 +105,20 @@ describe('a guest', () => {
     expect(unpackSampleTraces(sharedTraces(laboratory.db, link()))).toEqual([])
     expect(unpackExtractedTraces(await sharedExtracted(laboratory, link(), [0]))).toEqual([])
     const looked = { ...link(), versionId: lookInto(['M1.mzML']) }
-    expect(unpackSampleTraces(sharedTraces(laboratory.db, looked)).map(({ fileName }) => fileName)).toEqual(['M1.mzML'])
+    expect(unpackSampleTraces(sharedTraces(laboratory.db, looked)).map(({ position }) => position)).toEqual([0])
     expect(unpackExtractedTraces(await sharedExtracted(laboratory, looked, [0])).map(({ position }) => position)).toEqual([0])
+  })
+})
+
+describe('a guest, and whoever else draws traces', () => {
+  it('is not told what the files are called', async () => {
+    const looked = { ...link(), versionId: lookInto(['M1.mzML']) }
+    for (const packed of [sharedTraces(laboratory.db, looked), await sharedExtracted(laboratory, looked, [0])]) expect(Buffer.from(packed).includes('M1.mzML')).toBe(false)
+  })
+
+  it('ends the work by going away', async () => {
+    const looked = { ...link(), versionId: lookInto(['M1.mzML']) }
+    await expect(sharedExtracted(laboratory, looked, [0], AbortSignal.abort())).rejects.toThrow('aborted')
   })
 })
 

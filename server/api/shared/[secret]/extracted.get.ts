@@ -1,10 +1,8 @@
 import { sharedExtractQuerySchema } from '../../../../shared/schemas/comparison'
 import { sharedExtracted } from '../../../domain/share/sharedTraces'
 
-export default defineRoute(async (event) => {
+export default defineRoute((event) => {
   const { link } = requireShareLink(event)
   const { features } = readQueryInput(event, sharedExtractQuerySchema)
-  const packed = await sharedExtracted(useLaboratory(), link, features)
-  setResponseHeader(event, 'content-type', 'application/octet-stream')
-  return packed
+  return extractInTurn(event, `guest ${link.versionId}`, signal => sharedExtracted(useLaboratory(), link, features, signal))
 })

@@ -4,7 +4,5 @@ import { comparisonExtracted } from '../../../../../domain/comparison/comparison
 export default defineRoute(async (event) => {
   const { person, study } = await requireStudy(event)
   const query = readQueryInput(event, extractQuerySchema)
-  const packed = await comparisonExtracted(useLaboratory(), study.id, readParam(event, 'comparisonId'), person, query)
-  setResponseHeader(event, 'content-type', 'application/octet-stream')
-  return packed
+  return extractInTurn(event, person.id, signal => comparisonExtracted(useLaboratory(), study.id, readParam(event, 'comparisonId'), person, query, signal))
 })
