@@ -9,6 +9,8 @@ const FIRST_POINTS = 256
 const MOST_WAITING = 8192
 /** Points of all slices that wait: some 10 MB. */
 const MOST_WAITING_IN_ALL = 500_000
+/** Room for points of all slices, whether taken or not: 60 MB. Without it a file that fills one slice after the other takes gigabytes. */
+const MOST_ROOM = 3_000_000
 /** Points of one slice: it is sorted in memory, at about 60 bytes a point. */
 const MOST_SLICE_POINTS = 8_000_000
 const MOST_POINTS = 250_000_000
@@ -23,6 +25,8 @@ interface Waiting extends Centroids { length: number, spilled: number }
  */
 export class CentroidSpill {
   points = 0
+  /** Points there is room for in memory. */
+  room = 0
   private readonly slices = new Map<number, Waiting>()
   private waiting = 0
 
@@ -34,7 +38,10 @@ export class CentroidSpill {
   add(mz: number, intensity: number, scan: number): void {
     const slice = sliceOf(mz)
     let own = this.slices.get(slice)
-    if (!own) this.slices.set(slice, own = { ...columns(FIRST_POINTS), length: 0, spilled: 0 })
+    if (!own) {
+      this.slices.set(slice, own = { ...columns(FIRST_POINTS), length: 0, spilled: 0 })
+      this.room += FIRST_POINTS
+    }
     if (own.length === own.mz.length) this.makeRoom(slice, own)
     own.mz[own.length] = mz
     own.intensity[own.length] = intensity
@@ -73,11 +80,24 @@ export class CentroidSpill {
 
   private makeRoom(slice: number, own: Waiting): void {
     if (own.length >= MOST_WAITING) return this.write(slice, own)
+    if (this.room + own.length > MOST_ROOM) this.giveRoomBack()
+    if (own.length < own.mz.length) return
+    this.room += own.length
     const larger = columns(2 * own.length)
     larger.mz.set(own.mz)
     larger.intensity.set(own.intensity)
     larger.scan.set(own.scan)
     Object.assign(own, larger)
+  }
+
+  /** Slices that grew write what waits and begin small again. */
+  private giveRoomBack(): void {
+    for (const [slice, own] of this.slices) {
+      if (own.mz.length === FIRST_POINTS) continue
+      this.write(slice, own)
+      this.room -= own.mz.length - FIRST_POINTS
+      Object.assign(own, columns(FIRST_POINTS))
+    }
   }
 
   private write(slice: number, own: Waiting): void {
