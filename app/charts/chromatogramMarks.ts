@@ -1,4 +1,4 @@
-import { lowerBound } from '#shared/science/traces/centroids'
+import { firstNotBelow } from '#shared/science/numeric/firstPlace'
 import { highestOf, type Curve } from '~/charts/chromatogramCurves'
 import type { PeakMark } from '~/charts/chromatogramLabels'
 
@@ -36,5 +36,5 @@ export function peakMarks(curves: readonly Curve[], { mz, retentionMinutes, sele
 
 function topBeside({ minutes, values, feature }: Curve, time: number): number {
   const beside = feature === null ? BESIDE_OTHERS : BESIDE_ALONE
-  return highestOf(values, lowerBound(minutes, time - beside), lowerBound(minutes, time + beside))
+  return highestOf(values, firstNotBelow(minutes, time - beside), firstNotBelow(minutes, time + beside))
 }

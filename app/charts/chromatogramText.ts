@@ -1,4 +1,4 @@
-import { lowerBound } from '#shared/science/traces/centroids'
+import { firstNotBelow } from '#shared/science/numeric/firstPlace'
 import type { SideNames } from '#shared/science/verdict/reasonFacts'
 import { counted } from '#shared/science/numeric/numberWords'
 import type { Curve } from '~/charts/chromatogramCurves'
@@ -27,7 +27,7 @@ export interface HighestPoint {
 export function highestPoints(curves: readonly Curve[], [from, to]: TimeWindow): HighestPoint[] {
   const points = curves.map(({ side, sampleName, feature, minutes, values }): HighestPoint => {
     let top = -1
-    for (let i = lowerBound(minutes, from); i < minutes.length && minutes[i]! <= to; i++) {
+    for (let i = firstNotBelow(minutes, from); i < minutes.length && minutes[i]! <= to; i++) {
       if (values[i]! > (top < 0 ? 0 : values[top]!)) top = i
     }
     return { side, sampleName, feature, minutes: top < 0 ? Number.NaN : minutes[top]!, value: top < 0 ? 0 : values[top]! }

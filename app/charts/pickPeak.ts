@@ -1,3 +1,5 @@
+import { firstPlace } from '#shared/science/numeric/firstPlace'
+
 /** Features that can be picked. */
 export interface PickablePeaks {
   /** Time of each feature of the alignment. */
@@ -16,22 +18,11 @@ export function pickPeak({ minutes, level, byTime }: PickablePeaks, clickedMinut
   let picked: number | null = null
   const levelOf = (feature: number | null) => feature === null || !(level[feature]! > 0) ? 0 : level[feature]!
   const distance = (feature: number) => Math.abs(minutes[feature]! - clickedMinutes)
-  for (let k = firstFrom(minutes, byTime, clickedMinutes - reachMinutes); k < byTime.length; k++) {
+  for (let k = firstPlace(byTime.length, place => minutes[byTime[place]!]! >= clickedMinutes - reachMinutes); k < byTime.length; k++) {
     const feature = byTime[k]!
     if (minutes[feature]! > clickedMinutes + reachMinutes) break
     const gain = levelOf(feature) - levelOf(picked)
     if (picked === null || gain > 0 || (gain === 0 && distance(feature) < distance(picked))) picked = feature
   }
   return picked
-}
-
-function firstFrom(minutes: Float64Array, byTime: Int32Array, from: number): number {
-  let low = 0
-  let high = byTime.length
-  while (low < high) {
-    const middle = (low + high) >> 1
-    if (minutes[byTime[middle]!]! < from) low = middle + 1
-    else high = middle
-  }
-  return low
 }

@@ -1,21 +1,14 @@
 import { and, asc, eq, inArray, isNull } from 'drizzle-orm'
 import { correctScans } from '../../../shared/science/traces/correctScans'
+import type { AlignedScans } from '../../../shared/science/traces/highestSignals'
 import type { UsedTrace } from '../../../shared/types/trace'
 import type { Database } from '../../db/open'
 import { unpackFloat64 } from '../../db/packed'
 import { alignmentTables, traces } from '../../db/schema'
 
 /** One sample's trace as an alignment sees it. */
-export interface AlignedTrace extends UsedTrace {
+export interface AlignedTrace extends UsedTrace, Omit<AlignedScans, 'centroidsBetween'> {
   sampleName: string
-  /** Minutes a scan, corrected by the drift of the sample's table to the alignment's common time; not always ascending. */
-  scanMinutes: Float64Array
-  /** Offset of its masses, ppm: a feature at m/z stands in the file at m/z × (1 + offsetPpm·10⁻⁶). 0 where none was taken out. */
-  offsetPpm: number
-  lowestMz: number
-  highestMz: number
-  /** Centroids below this intensity were not kept. */
-  intensityLimit: number
 }
 
 /**

@@ -16,15 +16,3 @@ export function slicesBetween(lowMz: number, highMz: number): number[] {
   const last = sliceOf(Math.min(HIGHEST_MZ, highMz))
   return last < first ? [] : Array.from({ length: last - first + 1 }, (_, offset) => first + offset)
 }
-
-/** The first place whose value is not below `value` in an ascending column. */
-export function lowerBound(ascending: Float64Array, value: number): number {
-  let low = 0
-  let high = ascending.length
-  while (low < high) {
-    const middle = (low + high) >>> 1
-    if (ascending[middle]! < value) low = middle + 1
-    else high = middle
-  }
-  return low
-}

@@ -1,4 +1,4 @@
-import { lowerBound } from './centroids'
+import { firstAbove, firstNotBelow } from '../numeric/firstPlace'
 
 /** The part of a trace that is drawn, and how many columns of pixels it is drawn on. */
 export interface DrawnWindow { fromMinutes: number, toMinutes: number, columns: number }
@@ -20,8 +20,8 @@ export const POINTS_A_COLUMN = 4
 export function downSample(minutes: Float64Array, values: Float64Array, { fromMinutes, toMinutes, columns }: DrawnWindow): Int32Array {
   if (minutes.length !== values.length) throw new RangeError('A trace has as many values as times.')
   if (!(columns >= 1)) throw new RangeError('A trace is drawn on one column at least.')
-  const start = lowerBound(minutes, fromMinutes)
-  const end = firstAfter(minutes, toMinutes)
+  const start = firstNotBelow(minutes, fromMinutes)
+  const end = firstAbove(minutes, toMinutes)
   const before = start > 0 ? [start - 1] : []
   const after = end < minutes.length ? [end] : []
   if (end - start <= POINTS_A_COLUMN * columns) return Int32Array.from([...before, ...range(start, end), ...after])
@@ -55,12 +55,6 @@ export function downSample(minutes: Float64Array, values: Float64Array, { fromMi
 /** Column of a time within the window; the very end belongs to the last. */
 function columnAt(minutes: number, fromMinutes: number, perMinute: number, columns: number): number {
   return Math.min(columns - 1, Math.floor((minutes - fromMinutes) * perMinute))
-}
-
-function firstAfter(minutes: Float64Array, time: number): number {
-  let place = lowerBound(minutes, time)
-  while (place < minutes.length && minutes[place] === time) place++
-  return place
 }
 
 function range(start: number, end: number): number[] {

@@ -1,5 +1,6 @@
 import { massToleranceDa } from '../mass/tolerance'
-import { lowerBound, type Centroids } from './centroids'
+import { firstNotBelow } from '../numeric/firstPlace'
+import type { Centroids } from './centroids'
 
 /** The m/z between which a point belongs to an extracted trace, both ends within it. */
 export interface MzWindow { lowMz: number, highMz: number }
@@ -16,7 +17,7 @@ export function traceWindow(mz: number, ppm: number, floorDa: number | null = nu
 
 /**
  * Extracted ion trace: for each scan the sum of intensities whose m/z lies within the window; 0 where none does.
- * Two binary searches, then the points between: a slice of a million points costs no more than the trace itself.
+ * One search, then the points of the window: a slice of a million points costs no more than the trace itself.
  *
  * @param centroids points ascending by m/z; not changed
  * @param window both ends count as within
@@ -25,6 +26,6 @@ export function traceWindow(mz: number, ppm: number, floorDa: number | null = nu
  */
 export function extractTrace({ mz, intensity, scan }: Centroids, { lowMz, highMz }: MzWindow, scans: number): Float64Array {
   const trace = new Float64Array(scans)
-  for (let i = lowerBound(mz, lowMz); i < mz.length && mz[i]! <= highMz; i++) trace[scan[i]!]! += intensity[i]!
+  for (let i = firstNotBelow(mz, lowMz); i < mz.length && mz[i]! <= highMz; i++) trace[scan[i]!]! += intensity[i]!
   return trace
 }

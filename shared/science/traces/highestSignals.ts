@@ -1,12 +1,14 @@
 import { massToleranceDa } from '../mass/tolerance'
 import { ascendingOrder } from '../numeric/ascendingOrder'
-import { lowerBound, type Centroids } from './centroids'
+import { firstAbove, firstNotBelow } from '../numeric/firstPlace'
+import type { Centroids } from './centroids'
+import { timeOrder } from './timeOrder'
 
 /** One sample's trace as an alignment sees it. */
 export interface AlignedScans {
-  /** Minutes a scan, corrected to the alignment's common time. */
+  /** Minutes a scan, corrected to the alignment's common time; not always ascending. */
   scanMinutes: Float64Array
-  /** Offset of its masses, ppm; 0 where none is taken out. */
+  /** Offset of its masses, ppm: a feature at m/z stands in the file at m/z × (1 + offsetPpm·10⁻⁶). 0 where none is taken out. */
   offsetPpm: number
   /** Lowest and highest m/z of its centroids, as the file has them. */
   lowestMz: number
@@ -40,8 +42,9 @@ const FEATURES_A_STEP = 1000
  * @param onStep told the share of features that is done, now and then
  */
 export function highestSignals(mz: Float64Array, minutes: Float64Array, trace: AlignedScans, window: SignalWindow, onStep?: (share: number) => void): Float64Array {
-  const scans = scansInOrder(trace.scanMinutes)
-  const sum = new Float64Array(scans.minutes.length)
+  const { order, place } = timeOrder(trace.scanMinutes)
+  const scanMinutes = Float64Array.from(order, scan => trace.scanMinutes[scan]!)
+  const sum = new Float64Array(order.length)
   const shift = 1 + trace.offsetPpm * 1e-6
   const highest = new Float64Array(mz.length).fill(Number.NaN)
   ascendingOrder(mz).forEach((i, step) => {
@@ -50,10 +53,10 @@ export function highestSignals(mz: Float64Array, minutes: Float64Array, trace: A
     const low = (mz[i]! - tolerance) * shift
     const high = (mz[i]! + tolerance) * shift
     if (high < trace.lowestMz || low > trace.highestMz) return
-    const first = lowerBound(scans.minutes, minutes[i]! - window.retentionMinutes)
-    const end = firstAbove(scans.minutes, minutes[i]! + window.retentionMinutes)
-    if (first >= end || !(minutes[i]! >= scans.minutes[0]!) || !(minutes[i]! <= scans.minutes.at(-1)!)) return
-    for (const piece of trace.centroidsBetween(low, high)) addCentroids(piece, low, high, scans.rank, first, end, sum)
+    const first = firstNotBelow(scanMinutes, minutes[i]! - window.retentionMinutes)
+    const end = firstAbove(scanMinutes, minutes[i]! + window.retentionMinutes)
+    if (first >= end || !(minutes[i]! >= scanMinutes[0]!) || !(minutes[i]! <= scanMinutes.at(-1)!)) return
+    for (const piece of trace.centroidsBetween(low, high)) addCentroids(piece, low, high, place, first, end, sum)
     let most = 0
     for (let s = first; s < end; s++) {
       if (sum[s]! > most) most = sum[s]!
@@ -64,33 +67,10 @@ export function highestSignals(mz: Float64Array, minutes: Float64Array, trace: A
   return highest
 }
 
-/** The scans in ascending time, and the place of each in that order. */
-function scansInOrder(scanMinutes: Float64Array) {
-  const order = ascendingOrder(scanMinutes)
-  const minutes = new Float64Array(order.length)
-  const rank = new Int32Array(order.length)
-  for (let place = 0; place < order.length; place++) {
-    minutes[place] = scanMinutes[order[place]!]!
-    rank[order[place]!] = place
+/** Adds the centroids between two m/z to the sums of their scans, for scans whose place in time is `first` up to `end`. */
+function addCentroids({ mz, intensity, scan }: Centroids, low: number, high: number, place: Int32Array, first: number, end: number, sum: Float64Array): void {
+  for (let c = firstNotBelow(mz, low); c < mz.length && mz[c]! <= high; c++) {
+    const at = place[scan[c]!]!
+    if (at >= first && at < end) sum[at]! += intensity[c]!
   }
-  return { minutes, rank }
-}
-
-/** Adds the centroids between two m/z to the sums of their scans, for scans of rank `first` up to `end`. */
-function addCentroids({ mz, intensity, scan }: Centroids, low: number, high: number, rank: Int32Array, first: number, end: number, sum: Float64Array): void {
-  for (let c = lowerBound(mz, low); c < mz.length && mz[c]! <= high; c++) {
-    const place = rank[scan[c]!]!
-    if (place >= first && place < end) sum[place]! += intensity[c]!
-  }
-}
-
-function firstAbove(ascending: Float64Array, value: number): number {
-  let low = 0
-  let high = ascending.length
-  while (low < high) {
-    const middle = (low + high) >> 1
-    if (ascending[middle]! <= value) low = middle + 1
-    else high = middle
-  }
-  return low
 }

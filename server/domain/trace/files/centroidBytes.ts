@@ -1,6 +1,7 @@
 import { gzipSync } from 'node:zlib'
 import { columnOf, packColumns, unpackColumns } from '../../../../shared/formats/packedColumns'
-import { lowerBound, type Centroids } from '../../../../shared/science/traces/centroids'
+import { firstAbove, firstNotBelow } from '../../../../shared/science/numeric/firstPlace'
+import type { Centroids } from '../../../../shared/science/traces/centroids'
 import type { MzWindow } from '../../../../shared/science/traces/extractTrace'
 
 /** Quick, and nearly as small as slower ways: the last digits of measured numbers don't compress. */
@@ -15,9 +16,7 @@ export const packSlice = ({ mz, intensity, scan }: Centroids): Buffer => gzipSyn
 export function pointsWithin(bytes: Uint8Array, { lowMz, highMz }: MzWindow): Centroids {
   const { columns } = unpackColumns(bytes)
   const mz = columnOf(columns, 'mz', Float64Array)
-  const from = lowerBound(mz, lowMz)
-  let to = from
-  while (to < mz.length && mz[to]! <= highMz) to++
+  const [from, to] = [firstNotBelow(mz, lowMz), firstAbove(mz, highMz)]
   return { mz: mz.subarray(from, to), intensity: columnOf(columns, 'intensity', Float64Array).subarray(from, to), scan: columnOf(columns, 'scan', Int32Array).subarray(from, to) }
 }
 
