@@ -1,10 +1,11 @@
-import { and, asc, eq, inArray, isNull } from 'drizzle-orm'
+import { asc, eq, inArray } from 'drizzle-orm'
 import { correctScans } from '../../../shared/science/traces/correctScans'
 import type { AlignedScans } from '../../../shared/science/traces/highestSignals'
 import type { UsedTrace } from '../../../shared/types/trace'
 import type { Database } from '../../db/open'
 import { unpackFloat64 } from '../../db/packed'
 import { alignmentTables, traces } from '../../db/schema'
+import { tracesByPosition } from './tracesByPosition'
 
 /** One sample's trace as an alignment sees it. */
 export interface AlignedTrace extends UsedTrace, Omit<AlignedScans, 'centroidsBetween'> {
@@ -16,14 +17,7 @@ export interface AlignedTrace extends UsedTrace, Omit<AlignedScans, 'centroidsBe
  * Whoever calls has looked at the right to see the alignment.
  */
 export function standingTraces(db: Database, alignmentId: string): AlignedTrace[] {
-  const places = tablePlaces(db, alignmentId)
-  const sampleIds = places.flatMap(({ sampleId }) => sampleId ?? [])
-  const rows = db.select(brief).from(traces).where(and(inArray(traces.sampleId, sampleIds), isNull(traces.replacedAt))).orderBy(asc(traces.createdAt), asc(traces.id)).all()
-  const bySample = new Map(rows.map(row => [row.sampleId, row]))
-  return places.flatMap((place) => {
-    const trace = place.sampleId === null ? undefined : bySample.get(place.sampleId)
-    return trace ? [alignedTrace(place, trace)] : []
-  })
+  return usedTraces(db, alignmentId, tracesByPosition(db, alignmentId))
 }
 
 /** The traces that a version of a comparison used, whether they still stand or not; those that are gone are not in it. */
@@ -38,13 +32,13 @@ export function usedTraces(db: Database, alignmentId: string, used: readonly Use
 }
 
 const brief = {
-  id: traces.id, sampleId: traces.sampleId, fileName: traces.fileName, sha256: traces.sha256, minutes: traces.minutes,
+  id: traces.id, fileName: traces.fileName, sha256: traces.sha256, minutes: traces.minutes,
   lowestMz: traces.lowestMz, highestMz: traces.highestMz, intensityLimit: traces.intensityLimit,
 }
 
 function tablePlaces(db: Database, alignmentId: string) {
-  const { position, sampleId, sampleName, offsetPpm, offsetApplied, driftMinutes, driftShift } = alignmentTables
-  return db.select({ position, sampleId, sampleName, offsetPpm, offsetApplied, driftMinutes, driftShift }).from(alignmentTables)
+  const { position, sampleName, offsetPpm, offsetApplied, driftMinutes, driftShift } = alignmentTables
+  return db.select({ position, sampleName, offsetPpm, offsetApplied, driftMinutes, driftShift }).from(alignmentTables)
     .where(eq(alignmentTables.alignmentId, alignmentId)).orderBy(asc(position)).all()
 }
 

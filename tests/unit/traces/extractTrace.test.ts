@@ -1,8 +1,8 @@
 import { describe, expect, it } from 'vitest'
-import { slicesBetween, type Centroids } from '../../../../shared/science/traces/centroids'
-import { extractTrace, traceWindow } from '../../../../shared/science/traces/extractTrace'
-import { sortCentroids } from '../../../../shared/science/traces/sortCentroids'
-import { seededRandom } from '../../../support/seededRandom'
+import { slicesBetween, type Centroids } from '../../../shared/science/traces/centroids'
+import { extractTrace, traceWindow } from '../../../shared/science/traces/extractTrace'
+import { sortCentroids } from '../../../shared/science/traces/sortCentroids'
+import { seededRandom } from '../../support/seededRandom'
 
 const scans = 50
 function manyCentroids(points: number, seed: number): Centroids {
