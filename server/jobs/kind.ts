@@ -14,6 +14,8 @@ export interface JobKind<Input, Result> {
   heapMb: number
   /** Megabytes of it for what lives shortly; small where little memory counts more than speed. */
   youngHeapMb?: number
+  /** What is told where that was not enough. */
+  tooMuch?: string
   /** Minutes after which the work is stopped, so that others get their turn; MOST_MINUTES where not said. */
   mostMinutes?: number
   /** Reads what the worker needs; runs just before it starts. Throw a DomainError where there is nothing to do. */

@@ -143,7 +143,7 @@ export class Jobs {
     if (error instanceof DomainError) return this.end(job, 'failed', error.message)
     console.error(`[job ${job.id}] ${job.kind}`, error)
     const outOfMemory = error instanceof Error && 'code' in error && error.code === 'ERR_WORKER_OUT_OF_MEMORY'
-    this.end(job, 'failed', outOfMemory ? 'This is more than the memory set for one job. Use fewer or smaller tables.' : 'Something went wrong in this job. Nothing of it was kept.')
+    this.end(job, 'failed', outOfMemory ? this.kinds[job.kind]?.tooMuch ?? 'This is more than the memory set for one job. Use fewer or smaller tables.' : 'Something went wrong in this job. Nothing of it was kept.')
   }
 
   private end(job: Job, status: 'failed' | 'cancelled', message: string) {

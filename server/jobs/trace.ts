@@ -21,6 +21,7 @@ export const trace: JobKind<TraceInput, ReadTrace> = {
   // The text of one scan's array; points lie outside of the heap.
   heapMb: 96,
   youngHeapMb: 8,
+  tooMuch: 'The file can\'t be read: single parts of it need more memory than any instrument\'s file does. Please export it again as plain mzML.',
   // A gigabyte on a slow machine that does other work too.
   mostMinutes: 60,
   prepare({ db, folder }, { uploadId, intensityLimit }) {

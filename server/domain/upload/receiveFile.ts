@@ -30,8 +30,10 @@ export const traceLimit: UploadLimit = { bytes: MAX_TRACE_BYTES, room: 5, tooLar
 export async function checkRoom(folder: string, bytes: number | null, limit: UploadLimit = tableLimit) {
   if (bytes !== null && bytes > limit.bytes) throw new DomainError('tooLarge', limit.tooLarge)
   const { bavail, bsize } = await statfs(folder)
-  if (bavail * bsize < RESERVED_BYTES + limit.room * (bytes ?? limit.bytes)) throw new DomainError('full', 'The server\'s disk is nearly full, so the file was not taken. Ask the lab lead to make room.')
+  if (bavail * bsize < RESERVED_BYTES + limit.room * (bytes ?? limit.bytes)) throw diskFull()
 }
+
+const diskFull = () => new DomainError('full', 'The server\'s disk is nearly full, so the file was not taken. Ask the lab lead to make room.')
 
 /** Writes a file to `incoming/` as it arrives, counting and hashing. Whatever goes wrong, nothing of it stays. */
 export async function receiveFile(folder: string, chunks: AsyncIterable<Uint8Array>, limit: UploadLimit = tableLimit): Promise<ReceivedFile> {
@@ -51,7 +53,8 @@ export async function receiveFile(folder: string, chunks: AsyncIterable<Uint8Arr
   }
   catch (error) {
     rmSync(path, { force: true })
-    throw error
+    // Others' files may have taken the room meanwhile.
+    throw error instanceof Error && 'code' in error && (error.code === 'ENOSPC' || error.code === 'EDQUOT') ? diskFull() : error
   }
   finally {
     await file.close()

@@ -9,8 +9,10 @@ export interface MzmlScan { minutes: number, mz: Float64Array, intensity: Float6
 
 const DEEPEST = 64
 const MOST_ATTRIBUTES = 64
-/** Characters that may pass without a tag: an array of the most points in base64, and room. */
+/** Characters that may pass without a tag, and that an array may have in all: one of the most points in base64, and room. */
 const LONGEST_STRETCH = 2 ** 25
+/** Characters of an element's name: all that are open are held. */
+const LONGEST_NAME = 256
 
 /** Reads mzML as text in pieces and hands out each MS1 scan of one polarity as it ends. Holds one scan at a time. */
 export class MzmlParser {
@@ -38,7 +40,6 @@ export class MzmlParser {
       this.stretch = 0
     })
     this.xml.on('attribute', () => {
-      this.stretch = 0
       if (++this.attributes > MOST_ATTRIBUTES) throw new MzmlRefused(`An element of the file has more than ${MOST_ATTRIBUTES} attributes: this is no mzML.`)
     })
     this.xml.on('opentag', tag => this.open(tag))
@@ -77,6 +78,7 @@ export class MzmlParser {
     const name = local(tag.name)
     const parent = this.path.at(-1)
     if (parent === undefined && name !== 'mzML' && name !== 'indexedmzML') throw new MzmlRefused(`This is no mzML file: it begins with “${name.slice(0, 80)}”.`)
+    if (tag.name.length > LONGEST_NAME) throw new MzmlRefused('An element of the file has a name of many hundred characters: this is no mzML.')
     if (this.path.length === DEEPEST) throw new MzmlRefused(`The file nests more than ${DEEPEST} elements: this is no mzML.`)
     this.began = true
     this.path.push(name)
@@ -122,6 +124,7 @@ export class MzmlParser {
   /** Text is gathered within wanted arrays alone. */
   private listen(array: { text: string }): void {
     this.xml.on('text', (text) => {
+      if (array.text.length + text.length > LONGEST_STRETCH) throw new MzmlRefused('An array of the file is many megabytes long: this is no mzML.')
       array.text += text
     })
   }

@@ -2,6 +2,8 @@
 export const DRAWN_WIDTH_MINUTES = 0.1
 /** A peak is drawn so many standard deviations to each side; beyond it is below 0.04 % of its top. */
 const REACH_DEVIATIONS = 4
+/** Points of a grid at most: five hours at the step of a usual width. Beyond, be it by a single odd time, the step is wider. */
+const MOST_GRID_POINTS = 60_000
 /** Full width at half maximum of a Gaussian in standard deviations: 2·√(2·ln 2). */
 export const WIDTH_IN_DEVIATIONS = 2 * Math.sqrt(2 * Math.LN2)
 
@@ -22,6 +24,7 @@ export interface EvenGrid { firstMinutes: number, stepMinutes: number, count: nu
  * A trace drawn from features, where there is no raw data: each is a Gaussian as high as its intensity. `sum` adds them
  * (in the place of a total), `highest` shows the highest at each time (in the place of a base peak).
  * A top lies at most half a step beside a point of the grid: with a step of a twentieth of the width it is drawn at 99.8 % or more.
+ * On a grid too wide for peaks, one that no point meets stands as high as it is at the nearest.
  *
  * @param chosen places of the features to draw; all where left out
  * @returns one value a point of the grid; 0 where no feature is near
@@ -46,7 +49,7 @@ export function drawFromFeatures({ minutes, heights, widthMinutes }: DrawnFeatur
 function addPeak(values: Float64Array, { firstMinutes, stepMinutes, count }: EvenGrid, top: number, height: number, deviation: number, sum: boolean): void {
   const from = Math.max(0, Math.ceil((top - REACH_DEVIATIONS * deviation - firstMinutes) / stepMinutes))
   const to = Math.min(count - 1, Math.floor((top + REACH_DEVIATIONS * deviation - firstMinutes) / stepMinutes))
-  if (from > to) return
+  if (from > to) return addTop(values, Math.round((top - firstMinutes) / stepMinutes), height, sum)
   const step = stepMinutes / deviation
   const distance = (firstMinutes + from * stepMinutes - top) / deviation
   let value = height * Math.exp(-0.5 * distance * distance)
@@ -60,6 +63,12 @@ function addPeak(values: Float64Array, { firstMinutes, stepMinutes, count }: Eve
   }
 }
 
+/** A peak narrower than a step of the grid stands at the nearest point. */
+function addTop(values: Float64Array, place: number, height: number, sum: boolean): void {
+  if (!(place >= 0 && place < values.length)) return
+  values[place] = sum ? values[place]! + height : Math.max(values[place]!, height)
+}
+
 /** The grid that shows all features from first to last, with room for their flanks; none before the start of the run. */
 export function gridOver(minutes: Float64Array, widthMinutes = DRAWN_WIDTH_MINUTES): EvenGrid {
   let first = Number.POSITIVE_INFINITY
@@ -71,7 +80,9 @@ export function gridOver(minutes: Float64Array, widthMinutes = DRAWN_WIDTH_MINUT
   const stepMinutes = widthMinutes / 20
   if (first > last) return { firstMinutes: 0, stepMinutes, count: 0 }
   const start = Math.max(0, first - 3 * widthMinutes)
-  return { firstMinutes: start, stepMinutes, count: Math.ceil((last + 3 * widthMinutes - start) / stepMinutes) + 1 }
+  const span = last + 3 * widthMinutes - start
+  const step = Math.max(stepMinutes, span / (MOST_GRID_POINTS - 2))
+  return { firstMinutes: start, stepMinutes: step, count: Math.ceil(span / step) + 1 }
 }
 
 /** The times of a grid. */

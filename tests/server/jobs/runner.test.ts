@@ -115,6 +115,10 @@ describe('jobs', () => {
     const job = add({ act: 'hoard' })
     await runner.idle()
     expect(read(job.id)?.message).toContain('memory')
+    runner = new Jobs({ db: open.db, folder: open.folder }, { test: { ...kind, tooMuch: 'The file is no mzML.' } }, { test: worker })
+    const other = add({ act: 'hoard' })
+    await runner.idle()
+    expect(read(other.id)?.message).toBe('The file is no mzML.')
     silence.mockRestore()
   })
 

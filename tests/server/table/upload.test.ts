@@ -340,6 +340,13 @@ describe('limits', () => {
     })())).rejects.toThrow('aborted')
     expect(filesIn('incoming')).toEqual([])
   })
+  it('says that the disk is full where it fills up while a file comes, and keeps nothing', async () => {
+    await expect(receiveFile(laboratory.folder, (async function* () {
+      yield new Uint8Array(10)
+      throw Object.assign(new Error('ENOSPC: no space left on device, write'), { code: 'ENOSPC' })
+    })())).rejects.toMatchObject({ kind: 'full' })
+    expect(filesIn('incoming')).toEqual([])
+  })
 })
 
 describe('after a kill', () => {

@@ -74,6 +74,18 @@ describe('the grid over all features', () => {
     })
   })
 
+  it('stays small where one time is odd, and still draws every top', () => {
+    for (const odd of [1e9, 1e300]) {
+      const minutes = Float64Array.of(1, 2, odd)
+      const all = gridOver(minutes)
+      expect(all.count).toBeLessThanOrEqual(60_000)
+      expect(gridMinutes(all).at(-1)).toBeGreaterThanOrEqual(odd)
+      const [sum, highest] = (['sum', 'highest'] as const).map(combine => drawFromFeatures({ minutes, heights: Float64Array.of(100, 50, 70) }, all, combine))
+      expect([Math.max(...sum ?? []), Math.max(...highest ?? [])]).toEqual([150, 100])
+      expect(sum?.reduce((total, value) => total + value, 0)).toBeCloseTo(220, 6)
+    }
+  })
+
   it('is empty without features', () => {
     expect(gridOver(new Float64Array(0)).count).toBe(0)
     expect(gridMinutes(gridOver(new Float64Array(0)))).toHaveLength(0)

@@ -106,6 +106,13 @@ describe('readScans', () => {
     expect(await refusal(one().replace('<softwareList', `${'<cvParam accession="a" name="b"/>'.repeat(2000)}<softwareList`).replace('<scanList', `${'<cvParam accession="a" name="b"/>'.repeat(2000)}<scanList`))).toMatch(/more than 1000 terms/)
   })
 
+  it('refuses what would pile up in memory: arrays in many parts, long names, long attributes', async () => {
+    const part = `<binary>${'A'.repeat(8_000_000)}</binary>`
+    expect(await refusal(one().replace(/<binary>[^<]*<.binary>/, part.repeat(5)))).toMatch(/many megabytes/)
+    expect(await refusal(one().replace('<softwareList', `<${'a'.repeat(1000)}><softwareList`))).toMatch(/many hundred characters/)
+    expect(await refusal(one().replace('id="run"', Array.from({ length: 5 }, (_, i) => `a${i}="${'x'.repeat(8_000_000)}"`).join(' ')))).toMatch(/many megabytes/)
+  })
+
   it('refuses a file that ends early, wherever', async () => {
     const text = one()
     for (const share of [0.2, 0.5, 0.9, 0.99]) expect(await refusal(text.slice(0, Math.floor(text.length * share)))).toMatch(/the file ends early|not even XML/)
