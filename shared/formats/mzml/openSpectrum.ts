@@ -1,3 +1,4 @@
+import { MOST_MINUTES } from '../../science/numeric/measurable'
 import { arrayEncoding, decodeArray } from './decodeArray'
 import { MzmlRefused } from './mzmlRefused'
 import { ParamList } from './params'
@@ -38,14 +39,14 @@ export class OpenSpectrum {
     return this.term(PROFILE_SPECTRUM) !== undefined
   }
 
-  /** Null where it does not say a time. */
+  /** Null where it does not say a time, or none that a run can have. */
   get minutes(): number | null {
     const time = this.scanParams.find(SCAN_START_TIME)
     if (!time || time.value.trim() === '') return null
     const unit = UNITS_IN_A_MINUTE[time.unitAccession]
     if (unit === undefined) throw new MzmlRefused(`${this.where} gives its time ${time.unitAccession ? `in a unit that is not known (“${time.unitAccession.slice(0, 80)}”)` : 'without a unit'}. Minutes and seconds are read.`)
     const minutes = Number(time.value) / unit
-    return Number.isFinite(minutes) && minutes >= 0 ? minutes : null
+    return minutes >= 0 && minutes < MOST_MINUTES ? minutes : null
   }
 
   /** Takes one array in: its terms, its own length where it has one, and its text. Arrays of other kinds are passed over. */

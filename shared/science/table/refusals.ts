@@ -1,12 +1,11 @@
 import { wholeNumber } from '../numeric/numberWords'
+import { MOST_COUNTS, MOST_MINUTES } from '../numeric/measurable'
 import { MAX_REFUSED_ROWS } from './layout'
 import { TableRefused } from './tableRefused'
 
 /** A row, or in a wide table a cell, that can't be used: where (line counted from 1, header included), what stood there, and why. */
 export interface RefusedRow { line: number, column: string, value: string, reason: string }
 
-/** Above any detector, and low enough that sums and normalised values stay finite. */
-const MOST_COUNTS = 1e30
 
 /** Collects refused rows; far too many of them mean that the file is read in the wrong way. */
 export class Refusals {
@@ -30,7 +29,7 @@ export function whyNoMz(text: string | undefined, value: number): string | null 
 
 /** Why a cell is no retention time; null where it is one. */
 export function whyNoTime(text: string | undefined, value: number): string | null {
-  return whyNoNumber(text, value) ?? (value >= 0 ? null : 'a retention time can\'t be negative')
+  return whyNoNumber(text, value) ?? (value >= 0 ? (value < MOST_MINUTES ? null : 'a retention time must lie below 100\u202F000 minutes') : 'a retention time can\'t be negative')
 }
 
 /** Why a cell is no intensity; null where it is one. */

@@ -1,10 +1,11 @@
+import { MOST_COUNTS } from '../numeric/measurable'
 import { HIGHEST_MZ } from './centroids'
 
 /** Total and base peak of one scan in counts, and the points that are no measurement. */
 export interface ScanSignal { total: number, base: number, odd: number }
 
-/** Is this a point of a spectrum: an m/z in (0, 10⁵) and a finite intensity that is not negative? */
-export const isPoint = (mz: number, intensity: number): boolean => mz > 0 && mz < HIGHEST_MZ && intensity >= 0 && intensity < Number.POSITIVE_INFINITY
+/** Is this a point of a spectrum: an m/z in (0, 10⁵) and an intensity from 0 to below 10³⁰? */
+export const isPoint = (mz: number, intensity: number): boolean => mz > 0 && mz < HIGHEST_MZ && intensity >= 0 && intensity < MOST_COUNTS
 
 /**
  * Total signal (sum) and base peak (maximum) of one scan, from its points and not from what the file declares; both 0 for an empty scan.

@@ -55,7 +55,7 @@ describe('readScans', () => {
 
   it('sorts scans whose times are out of order, and leaves points that are no measurement out', async () => {
     const { traces, centroids } = await tracesOf(mzmlText([
-      writtenScan({ minutes: 3, mz: [300], intensity: [3] }), writtenScan({ minutes: 1, mz: [100, 101, 102, -5, Number.NaN], intensity: [1, Number.NaN, -4, 9, 9] }), writtenScan({ minutes: 2, mz: [], intensity: [] }),
+      writtenScan({ minutes: 3, mz: [300], intensity: [3] }), writtenScan({ minutes: 1, mz: [100, 101, 102, -5, Number.NaN, 103, 104], intensity: [1, Number.NaN, -4, 9, 9, 1e308, 1e308] }), writtenScan({ minutes: 2, mz: [], intensity: [] }),
     ]))
     expect([...traces.minutes]).toEqual([1, 2, 3])
     expect([...traces.total]).toEqual([1, 0, 3])
@@ -65,6 +65,7 @@ describe('readScans', () => {
 
   it('refuses a run of which no scan says its time, or a time without a unit', async () => {
     expect(await refusal(mzmlText([writtenScan({ minutes: null })]))).toMatch(/when it was taken/)
+    expect(await refusal(mzmlText([writtenScan({ minutes: 1e300 })]))).toMatch(/when it was taken/)
     expect(await refusal(one().replace(/ unitCvRef="UO"[^/]*unitName="minute"/, ''))).toMatch(/without a unit/)
     expect(await refusal(one().replace('UO:0000031', 'UO:0000033'))).toMatch(/“UO:0000033”/)
   })
