@@ -1,5 +1,6 @@
 import { expect } from 'vitest'
 import FeatureHead from '~/components/comparison/FeatureHead.vue'
+import FeatureRow from '~/components/comparison/FeatureRow.vue'
 import FeatureSection from '~/components/comparison/FeatureSection.vue'
 import { featureColumns } from '~/utils/featureColumns'
 import { holds, type ComponentRows } from './componentCase'
@@ -21,6 +22,25 @@ export const featureTableRows: ComponentRows = {
       await press(control(/^Menu of m\/z/).attributes('aria-label') ?? '')
       const place = columns.findIndex(({ id }) => id === 'mz')
       expect([emitted('press'), emitted('menu')[0]?.[0]]).toEqual([[[place, false]], place])
+    }),
+  ],
+  'comparison/FeatureRow': [
+    holds(FeatureRow, 'says whether it is picked and where it stands, is pressed, and tells full values on hover', {
+      props: { index: 3, feature: 4, verdict: result.columns.verdict[4] ?? 0, top: 84, height: 28, state: 'picked', isCursor: true, columns, frozen: 0, styles: [], classes: [], flags: undefined, names: sideNames },
+    }, async ({ find, emitted, change, until }) => {
+      const row = find('[role=row]')
+      expect(row.attributes()).toMatchObject({ 'aria-rowindex': '5', 'aria-selected': 'true' })
+      expect(row.classes()).toContain('outline-dashed')
+      const cells = row.findAll('[role=gridcell]')
+      const mz = cells[columns.findIndex(({ id }) => id === 'mz')]
+      expect([cells.length, mz?.attributes('title')]).toEqual([columns.length, undefined])
+      await row.trigger('mouseover')
+      await until(() => expect(Number(mz?.attributes('title'))).toBe(result.columns.mz[4]))
+      await row.trigger('click')
+      expect(emitted('press')).toHaveLength(1)
+      await change({ state: 'none', isCursor: false })
+      await until(() => expect(row.attributes('aria-selected')).toBe('false'))
+      expect(row.classes()).not.toContain('outline-dashed')
     }),
   ],
   'comparison/FeatureSection': [
