@@ -1,3 +1,4 @@
+import type { SideNames } from '#shared/science/verdict/reasonFacts'
 import { ESTIMATED_DASH, groupLook, legend, MARK_SIZE, sampleSays } from '~/charts/abundanceLook'
 import { fitText, round, textWidth, type Drawing, type DrawnShape } from '~/charts/drawing'
 import { logScale, type LogScale } from '~/charts/logScale'
@@ -11,7 +12,7 @@ export interface AbundanceInput {
   /** Of the signal that is drawn. */
   values: readonly SampleValue[]
   means: readonly SideMean[]
-  names: { a: string, b: string }
+  names: SideNames
   signal: Signal
   /** Pixels. */
   width: number

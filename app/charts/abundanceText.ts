@@ -1,4 +1,5 @@
 import { counted } from '#shared/science/numeric/numberWords'
+import type { SideNames } from '#shared/science/verdict/reasonFacts'
 import { runBatches } from '~/charts/abundanceRun'
 import { sampleDotsText } from '~/charts/sampleDots'
 import { groupLabels, type SampleValue } from '~/charts/sampleValues'
@@ -7,15 +8,13 @@ import type { Signal } from '~/utils/benchView'
 import { formatIntensity } from '~/utils/formatMeasures'
 import { formatTimes } from '~/utils/formatStatistics'
 
-interface Names { a: string, b: string }
-
 /** The samples of a feature by preparation, in words. */
-export function abundanceText(values: readonly SampleValue[], means: readonly SideMean[], names: Names): string {
+export function abundanceText(values: readonly SampleValue[], means: readonly SideMean[], names: SideNames): string {
   return [sampleDotsText(values, names, formatIntensity), ...means.map(mean => meanWords(mean, names)), floorWords(values, names)].filter(Boolean).join(' ')
 }
 
 /** The same over the run. */
-export function runText(values: readonly SampleValue[], names: Names): string {
+export function runText(values: readonly SampleValue[], names: SideNames): string {
   const { batches, without } = runBatches(values)
   const runs = batches.reduce((sum, batch) => sum + batch.runs.length, 0)
   const missing = without.length === 0 ? '' : `${counted(without.length, 'sample')} without a run order in the sample sheet ${without.length === 1 ? 'is' : 'are'} not drawn here: ${listed(without.map(({ name }) => name))}.`
@@ -25,7 +24,7 @@ export function runText(values: readonly SampleValue[], names: Names): string {
   return [`${counted(runs, 'injection')} in run order${among}.`, sampleDotsText(drawn, names, formatIntensity), floorWords(drawn, names), missing].filter(Boolean).join(' ')
 }
 
-function meanWords({ side, detected, preparations, log2, interval }: SideMean, names: Names): string {
+function meanWords({ side, detected, preparations, log2, interval }: SideMean, names: SideNames): string {
   const name = side === 'A' ? names.a : names.b
   if (detected === 0) return ''
   if (preparations.length === 1) return `${name}: one preparation, so no mean and no interval.`
@@ -36,7 +35,7 @@ function meanWords({ side, detected, preparations, log2, interval }: SideMean, n
 }
 
 /** What floors the groups have, and whether they were stated. */
-function floorWords(values: readonly SampleValue[], names: Names): string {
+function floorWords(values: readonly SampleValue[], names: SideNames): string {
   const labels = groupLabels(names)
   const parts = [...new Set(values.map(({ group }) => group))].flatMap((group) => {
     const own = values.filter(value => value.group === group)

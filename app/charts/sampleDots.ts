@@ -1,3 +1,4 @@
+import type { SideNames } from '#shared/science/verdict/reasonFacts'
 import { groupLook } from '~/charts/abundanceLook'
 import { fitText, round, type Drawing, type DrawnShape } from '~/charts/drawing'
 import { logScale } from '~/charts/logScale'
@@ -23,7 +24,7 @@ const ROW = 30
 const FOOT = 20
 
 /** Lays out a small dot plot, one row a group, on one log axis that holds every value and floor. */
-export function sampleDots(values: readonly SampleValue[], names: { a: string, b: string }): SampleDots {
+export function sampleDots(values: readonly SampleValue[], names: SideNames): SampleDots {
   const scale = logScale(values.flatMap(({ value, floor }) => [value, floor]), LEFT, WIDTH - RIGHT)
   const groups = [...new Set(values.map(({ group }) => group))]
   const rows = groups.map((group, at): DotRow => {
@@ -58,7 +59,7 @@ export function dotsDrawing({ width, height, rows, ticks }: SampleDots): Drawing
 }
 
 /** The dot plot in words. */
-export function sampleDotsText(values: readonly SampleValue[], names: { a: string, b: string }, format: (value: number) => string): string {
+export function sampleDotsText(values: readonly SampleValue[], names: SideNames, format: (value: number) => string): string {
   const groups = [...new Set(values.map(({ group }) => group))]
   return groups.map((group) => {
     const own = values.filter(value => value.group === group)

@@ -1,5 +1,6 @@
 import type { ComparisonData } from '#shared/formats/comparisonData'
 import { chooseSamples } from '#shared/science/verdict/chooseSamples'
+import type { SideNames } from '#shared/science/verdict/reasonFacts'
 import type { ComparedSample, ComparisonSettings } from '#shared/science/verdict/settings'
 
 /** Which row of the drawing a sample stands in. */
@@ -25,7 +26,7 @@ export interface SampleValue {
 const ORDER: readonly SampleGroup[] = ['A', 'B', 'blank', 'pooledQc', 'standard', 'notCompared']
 
 /** What the groups are called in drawings and in words. */
-export const groupLabels = (names: { a: string, b: string }): Record<SampleGroup, string> => ({
+export const groupLabels = (names: SideNames): Record<SampleGroup, string> => ({
   A: names.a, B: names.b, blank: 'blanks', pooledQc: 'pooled QCs', standard: 'standards', notCompared: 'not compared',
 })
 

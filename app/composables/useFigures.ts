@@ -1,5 +1,6 @@
 import type { InjectionKey } from 'vue'
 import type { Figure, FigureContext, FigureFormat } from '~/charts/figure/figure'
+import { saveFile } from '~/utils/saveFile'
 
 const key: InjectionKey<() => FigureContext | null> = Symbol('figures')
 
@@ -28,7 +29,7 @@ export function useFigures() {
       ])
       const drawn = drawFigure(figure, { title, description, context: about, date: new Date(), fontUrl })
       const svg = new Blob([drawn.svg], { type: 'image/svg+xml' })
-      saveAs(format === 'svg' ? svg : await toPng(svg, drawn.width, drawn.height), figureFileName(figure.name, about, format))
+      saveFile(figureFileName(figure.name, about, format), format === 'svg' ? svg : await toPng(svg, drawn.width, drawn.height))
     }
     catch {
       problem.value = 'The figure could not be made. Try the other format, or fewer features.'
@@ -57,13 +58,4 @@ async function toPng(svg: Blob, width: number, height: number): Promise<Blob> {
   finally {
     URL.revokeObjectURL(url)
   }
-}
-
-function saveAs(file: Blob, name: string) {
-  const link = document.createElement('a')
-  link.href = URL.createObjectURL(file)
-  link.download = name
-  link.click()
-  // The browser has taken it over by then.
-  setTimeout(() => URL.revokeObjectURL(link.href), 60_000)
 }

@@ -1,4 +1,5 @@
 import { probability, signed, threeDigits } from '#shared/science/numeric/numberWords'
+import type { SideNames } from '#shared/science/verdict/reasonFacts'
 import { NO_NUMBER } from '~/utils/formatMeasures'
 
 /** p or q with two significant digits; never 0. */
@@ -17,7 +18,7 @@ export function formatLog2(log2Ratio: number): string {
 }
 
 /** A log2 ratio of B over A as the ratio of the greater to the smaller side: "×3.2 in B"; "×1.0" where equal. */
-export function formatFold(log2Ratio: number, names: { a: string, b: string }): string {
+export function formatFold(log2Ratio: number, names: SideNames): string {
   if (!Number.isFinite(log2Ratio)) return NO_NUMBER
   const times = formatTimes(2 ** Math.abs(log2Ratio))
   return times === '×1' ? 'equal' : `${times} in ${log2Ratio < 0 ? names.a : names.b}`

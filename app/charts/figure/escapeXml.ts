@@ -1,4 +1,4 @@
-const MARKUP: Readonly<Record<string, string>> = { '&': '&amp;', '<': '&lt;', '>': '&gt;', '"': '&quot;', '\'': '&#39;' }
+import { escapeMarkup } from '~/charts/escapeMarkup'
 
 /** Leaves out the signs that XML forbids: most control characters, and halves of signs. */
 export function allowedXml(text: string): string {
@@ -6,7 +6,5 @@ export function allowedXml(text: string): string {
   return text.toWellFormed().replace(/[\u0000-\u0008\u000B\u000C\u000E-\u001F\uFFFE\uFFFF]/g, '')
 }
 
-/** Text as it stands within markup, as content or as an attribute. */
-export function escapeXml(text: string): string {
-  return allowedXml(text).replace(/[&<>"']/g, sign => MARKUP[sign] ?? '')
-}
+/** Text as it stands within the markup of a figure, as content or as an attribute. */
+export const escapeXml = (text: string): string => escapeMarkup(allowedXml(text))

@@ -1,5 +1,6 @@
 import { csvLine, csvLines, type CsvCell } from '../../../shared/formats/delimitedText/writeCsv'
 import { unpackVerdicts } from '../../../shared/formats/verdictColumns'
+import type { SideNames } from '../../../shared/science/verdict/reasonFacts'
 import { reasonSentence } from '../../../shared/science/verdict/reasonSentence'
 import { METHODS, REASON_LABELS, REASONS } from '../../../shared/science/verdict/reasons'
 import type { ComparisonSettings } from '../../../shared/science/verdict/settings'
@@ -30,9 +31,7 @@ export function versionCsv(version: CsvVersion, packed: Buffer, notes: string[])
   return { fileName: `steelyard-verdicts-version-${version.number}.csv`, chunks: chunks() }
 }
 
-type Names = { a: string, b: string }
-
-function header({ a, b }: Names): string[] {
+function header({ a, b }: SideNames): string[] {
   return [
     'feature', 'm/z', 'retention time (min)', 'verdict', 'reason', 'reason in words', 'ratio B/A', 'log2 ratio B/A', 'log2 low 95 %', 'log2 high 95 %',
     'judged by', 'p', 'q', 'p equivalence', 'reach', 'at least (times)', 'trace of the other side (times)', 'traces of the other side', `preparations found, ${a}`, `preparations, ${a}`, `preparations found, ${b}`, `preparations, ${b}`,
@@ -42,7 +41,7 @@ function header({ a, b }: Names): string[] {
 
 const METHOD_WORDS = { none: '', welch: 'Welch t', assumed: 'assumed precision' } as const
 
-function row(i: number, result: VerdictResult, settings: ComparisonSettings, names: Names): CsvCell[] {
+function row(i: number, result: VerdictResult, settings: ComparisonSettings, names: SideNames): CsvCell[] {
   const c = result.columns
   const reason = REASONS[c.reason[i]!]!
   return [

@@ -30,16 +30,10 @@ export const chartRows: ComponentRows = {
     }),
   ],
   'chart/EchartsCanvas.client': [
-    holds(EchartsCanvas, 'passes on which point of which series was clicked, and where a value lies once it is drawn', { props: { option: { series: [] } } }, ({ part, emitted }) => {
+    holds(EchartsCanvas, 'draws the option it is given, and takes parts away that the next one lacks', { props: { option: { series: [] } } }, ({ part }) => {
       const drawing = part.findComponent({ name: 'VChart' })
       expect(drawing.props('option')).toEqual({ series: [] })
-      drawing.vm.$emit('click', { componentType: 'series', seriesId: 'level', dataIndex: 7 })
-      drawing.vm.$emit('click', { componentType: 'xAxis' })
-      expect(emitted('pick')).toEqual([[{ seriesId: 'level', dataIndex: 7 }]])
-      drawing.vm.$emit('rendered')
-      const [toPixel] = emitted('drawn')[0] as [(value: [number, number]) => unknown]
-      // Without a drawing there is no place.
-      expect(toPixel([1, 2])).toBeNull()
+      expect(drawing.props('updateOptions')).toEqual({ replaceMerge: ['series', 'xAxis', 'yAxis', 'grid'] })
     }),
   ],
   'chart/GroupSizesChart': [
