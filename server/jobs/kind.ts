@@ -16,6 +16,8 @@ export interface JobKind<Input, Result> {
   youngHeapMb?: number
   /** What is told where that was not enough. */
   tooMuch?: string
+  /** Begins only while no other kind waits: many come at once, and nobody looks at them meanwhile. */
+  givesWay?: true
   /** Minutes after which the work is stopped, so that others get their turn; MOST_MINUTES where not said. */
   mostMinutes?: number
   /** Reads what the worker needs; runs just before it starts. Throw a DomainError where there is nothing to do. */

@@ -10,6 +10,8 @@ const MAX_WAITING = 3
 /** Far beyond honest work; but the widest tolerances on large tables would take days, and hold up everyone. */
 const MOST_MINUTES = 30
 const PROGRESS_MS = 250
+/** Where the end of a job can't be written, as on a full disk, it is tried again. */
+const AGAIN_MS = 10_000
 
 export interface NewJob { kind: string, studyId: string | null, input: unknown, personId: string }
 
@@ -23,6 +25,7 @@ export class Jobs {
     private readonly context: JobContext,
     private readonly kinds: Record<string, AnyJobKind>,
     private readonly workerSources: Record<string, string>,
+    private readonly againMs = AGAIN_MS,
   ) {}
 
   /** At start-up: what was running when the server ended is queued again, at most twice. */
@@ -69,7 +72,8 @@ export class Jobs {
   private next() {
     if (this.stopped || this.running.size >= this.atOnce) return
     const { db } = this.context
-    const job = db.select().from(jobs).where(eq(jobs.status, 'queued')).orderBy(asc(jobs.createdAt), sql`rowid`).get()
+    const givingWay = Object.keys(this.kinds).filter(name => this.kinds[name]?.givesWay)
+    const job = db.select().from(jobs).where(eq(jobs.status, 'queued')).orderBy(inArray(jobs.kind, givingWay), asc(jobs.createdAt), sql`rowid`).get()
     if (!job) return
     db.update(jobs).set({ status: 'running', startedAt: new Date(), attempts: job.attempts + 1, message: 'Starting.' }).where(eq(jobs.id, job.id)).run()
     this.start(job)
@@ -113,11 +117,23 @@ export class Jobs {
     worker.on('exit', () => {
       clearTimeout(limit)
       this.running.delete(job.id)
-      if (kept && !this.stopped && this.isRunning(job)) this.keep(job, kind, kept.result)
+      this.settle(job, kind, kept)
       kept = undefined
-      if (!this.stopped && this.isRunning(job)) this.end(job, 'failed', 'The work ended without a result. Please start it again.')
-      this.next()
     })
+  }
+
+  /** Writes what came of a worker that is gone, and starts the next. Where the disk takes nothing it fails later: files of its result are let go by then. */
+  private settle(job: Job, kind: AnyJobKind, kept?: { result: unknown }) {
+    if (this.stopped) return
+    try {
+      if (kept && this.isRunning(job)) this.keep(job, kind, kept.result)
+      if (this.isRunning(job)) this.end(job, 'failed', 'The work ended without a result. Please start it again.')
+      this.next()
+    }
+    catch (error) {
+      console.error(`[job ${job.id}] ${job.kind}: its end could not be written`, error)
+      setTimeout(() => this.settle(job, kind), this.againMs).unref()
+    }
   }
 
   private stopLate(job: Job, kind: AnyJobKind, worker: Worker) {

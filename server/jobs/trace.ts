@@ -22,6 +22,8 @@ export const trace: JobKind<TraceInput, ReadTrace> = {
   heapMb: 96,
   youngHeapMb: 8,
   tooMuch: 'The file can\'t be read: single parts of it need more memory than any instrument\'s file does. Please export it again as plain mzML.',
+  // A hundred files dropped at once are no reason for others to wait with a comparison.
+  givesWay: true,
   // A gigabyte on a slow machine that does other work too.
   mostMinutes: 60,
   prepare({ db, folder }, { uploadId, intensityLimit }) {

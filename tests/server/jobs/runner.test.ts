@@ -66,6 +66,30 @@ describe('jobs', () => {
     expect(kept).toEqual([2, 4, 6])
   })
 
+  it('of a kind that gives way begin when no other waits', async () => {
+    runner = new Jobs({ db: open.db, folder: open.folder }, { test: kind, patient: { ...kind, givesWay: true } }, { test: worker })
+    for (const value of [1, 2]) runner.add({ kind: 'patient', studyId: null, input: { act: 'double', value }, personId: 'p' })
+    for (const value of [3, 4]) add({ act: 'double', value })
+    await runner.idle()
+    expect(kept).toEqual([6, 8, 2, 4])
+  })
+
+  it('end later where the disk takes nothing, and hold up nobody', async () => {
+    const silence = vi.spyOn(console, 'error').mockImplementation(() => {})
+    let full = 2
+    const onDisk = { ...kind, abandon: (_: unknown, input: Input, reason: string) => {
+      if (full-- > 0) throw new Error('database or disk is full')
+      abandoned.push(reason)
+    } }
+    runner = new Jobs({ db: open.db, folder: open.folder }, { test: onDisk }, { test: worker }, 20)
+    const job = add({ act: 'silent' })
+    const next = add({ act: 'double', value: 2 })
+    await runner.idle()
+    expect([read(job.id)?.status, read(next.id)?.status]).toEqual(['failed', 'done'])
+    expect(abandoned).toHaveLength(1)
+    silence.mockRestore()
+  })
+
   it('say a refusal in its own words, and a fault of ours without detail', async () => {
     const silence = vi.spyOn(console, 'error').mockImplementation(() => {})
     const refused = add({ act: 'refuse' })
