@@ -1,4 +1,4 @@
-import { chmodSync, mkdirSync } from 'node:fs'
+import { chmodSync, existsSync, mkdirSync, readdirSync } from 'node:fs'
 import { join } from 'node:path'
 import Sqlite from 'better-sqlite3'
 import { drizzle, type BetterSQLite3Database } from 'drizzle-orm/better-sqlite3'
@@ -27,8 +27,9 @@ export async function openDatabase(folder: string, kind: LaboratoryKind, migrati
     mkdirSync(path, { recursive: true, mode: 0o700 })
     chmodSync(path, 0o700)
   }
-  const lock = lockFolder(folder)
   const path = join(folder, 'steelyard.db')
+  refuseFilesAlone(folder, path)
+  const lock = lockFolder(folder)
   const sqlite = new Sqlite(path)
   chmodSync(path, 0o600)
   sqlite.pragma('journal_mode = WAL')
@@ -56,6 +57,13 @@ export async function openDatabase(folder: string, kind: LaboratoryKind, migrati
     close()
     throw error
   }
+}
+
+/** Files that no row names are taken away at start: beside a new database that would be all of them. */
+function refuseFilesAlone(folder: string, path: string) {
+  const holds = (name: string) => existsSync(join(folder, name)) && readdirSync(join(folder, name)).some(each => !each.startsWith('.'))
+  if (existsSync(path) || !(holds('originals') || holds('traces'))) return
+  throw new Error(`${folder} holds files of a laboratory, but its database, steelyard.db, is not there. Put it back, or name another folder in STEELYARD_DATA.`)
 }
 
 /** SQLite holds the lock, so it goes with the process, however that ends. */

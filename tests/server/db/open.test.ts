@@ -1,4 +1,4 @@
-import { mkdtempSync, rmSync, statSync } from 'node:fs'
+import { existsSync, mkdirSync, mkdtempSync, rmSync, statSync } from 'node:fs'
 import { tmpdir } from 'node:os'
 import { join } from 'node:path'
 import { afterEach, describe, expect, it } from 'vitest'
@@ -35,6 +35,17 @@ describe('openDatabase', () => {
     lab.close()
     await expect(openDatabase(folder, 'demo', migrations)).rejects.toThrow('cannot be opened as a demo one')
     rmSync(folder, { recursive: true })
+  })
+
+  it('makes no new database beside the files of one that was moved away, which its sweep would take for left over', async () => {
+    open = await openTestLaboratory()
+    for (const name of ['originals/ab', 'traces/a']) {
+      const folder = mkdtempSync(join(tmpdir(), 'steelyard-alone-'))
+      mkdirSync(join(folder, name), { recursive: true })
+      await expect(openDatabase(folder, 'lab', migrations)).rejects.toThrow('steelyard.db, is not there')
+      expect([existsSync(join(folder, name)), existsSync(join(folder, 'steelyard.db'))]).toEqual([true, false])
+      rmSync(folder, { recursive: true })
+    }
   })
 
   it('keeps activity append-only', async () => {
