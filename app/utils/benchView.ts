@@ -1,14 +1,14 @@
 import { flagKinds, type FlagKind } from '#shared/schemas/flag'
-import { COUNTED_VERDICTS, type Verdict } from '#shared/science/verdict/verdicts'
-import { readGroups, readPair, readPresent, readScaling, writeGroups, writePair, writePresent, type ComponentPair, type FurtherGroup } from '~/utils/componentsView'
 import type { FeaturesPresent } from '#shared/science/components/chooseFeatures'
-import type { ComponentScaling } from '#shared/science/components/scaleFeatures'
-import { readArea, writeArea, type PlotArea } from '~/utils/plotArea'
-import { readWindow, writeWindow, type PlotWindow } from '~/utils/plotWindow'
+import { COMPONENT_SCALINGS, type ComponentScaling } from '#shared/science/components/scaleFeatures'
+import { COUNTED_VERDICTS, type Verdict } from '#shared/science/verdict/verdicts'
 import { DEFAULT_LAYOUT, readLayout, writeLayout, type ColumnLayout } from '~/utils/columnLayout'
+import { readGroups, readPair, readPresent, writeGroups, writePair, writePresent, type ComponentPair, type FurtherGroup } from '~/utils/componentsView'
 import { MOST_SORTS, SORT_KEYS, type FeatureSort } from '~/utils/featureOrder'
 import { readFormula, readMass, writeFormula, writeMass, type FormulaTarget, type MassTarget } from '~/utils/massTarget'
 import { OPEN_RANGE, readRange, writeRange, type NumberRange } from '~/utils/numberRange'
+import { readArea, writeArea, type PlotArea } from '~/utils/plotArea'
+import { readWindow, writeWindow, type PlotWindow } from '~/utils/plotWindow'
 import { RANGE_FILTERS, RANGE_NAMES, type RangeName } from '~/utils/rangeFilters'
 import { readTimeWindow, TRACE_KINDS, TRACE_ORIGINS, TRACE_SCALES, writeTimeWindow, type TimeWindow, type TraceKind, type TraceOrigin, type TraceScale } from '~/utils/traceView'
 
@@ -33,10 +33,10 @@ export type FlagFilter = 'all' | 'flagged' | FlagKind
 export const PLOTS = ['fold', 'components', 'abundance'] as const
 export type Plot = (typeof PLOTS)[number]
 
-/** How the abundance plot lays its samples out, and which signal it draws: in the comparison's normalised counts, or as each table states it. */
+/** How the abundance plot lays its samples out. */
 export const ABUNDANCE_LAYOUTS = ['preparation', 'run'] as const
 export type AbundanceLayout = (typeof ABUNDANCE_LAYOUTS)[number]
-/** In the comparison's normalised counts, or as each table states them. */
+/** Which signal it draws: in the comparison's normalised counts, or as each table states it. */
 export const SIGNALS = ['normalised', 'injected'] as const
 export type Signal = (typeof SIGNALS)[number]
 
@@ -44,6 +44,8 @@ export type Signal = (typeof SIGNALS)[number]
 export const MOST_PICKED = 100
 
 const field = <Value>(each: ViewField<Value>) => each
+/** A field that holds one of a few words, which stand in the address as they are. */
+const oneOf = <Value extends string>(words: readonly Value[], each: Omit<ViewField<Value>, 'read' | 'write'>): ViewField<Value> => ({ ...each, read: text => words.find(word => word === text), write: word => word })
 
 /** All that the address holds of the bench, so that a copied link opens it again. A new part is one more field here. */
 export const viewFields = {
@@ -58,11 +60,11 @@ export const viewFields = {
     const named = text.split('.')
     return COUNTED_VERDICTS.filter(name => named.includes(name))
   } }),
-  flags: field<FlagFilter>({ initial: 'all', key: 'flags', isStep: true, isFilter: true, read: text => (['flagged', ...flagKinds] as const).find(name => name === text), write: value => value }),
+  flags: oneOf<FlagFilter>(['all', 'flagged', ...flagKinds], { initial: 'all', key: 'flags', isStep: true, isFilter: true }),
   find: field<string>({ initial: '', key: 'find', isStep: false, isFilter: true, read: text => text.slice(0, 200), write: value => value }),
   massPpm: field<number>({ initial: 10, key: 'ppm', isStep: false, read: text => Number(text) > 0 && Number(text) <= 10_000 ? Number(text) : undefined, write: String }),
-  abundanceLayout: field<AbundanceLayout>({ initial: 'preparation', key: 'samples', isStep: true, read: text => ABUNDANCE_LAYOUTS.find(name => name === text), write: value => value }),
-  signal: field<Signal>({ initial: 'normalised', key: 'signal', isStep: true, read: text => SIGNALS.find(name => name === text), write: value => value }),
+  abundanceLayout: oneOf<AbundanceLayout>(ABUNDANCE_LAYOUTS, { initial: 'preparation', key: 'samples', isStep: true }),
+  signal: oneOf<Signal>(SIGNALS, { initial: 'normalised', key: 'signal', isStep: true }),
   /** m/z within so many ppm; m/z of the usual ions of a neutral mass, and of a formula. */
   mzNear: field<MassTarget | null>({ initial: null, key: 'mz', isStep: true, isFilter: true, read: readMass, write: writeMass }),
   massNear: field<MassTarget | null>({ initial: null, key: 'mass', isStep: true, isFilter: true, read: readMass, write: writeMass }),
@@ -72,7 +74,7 @@ export const viewFields = {
   sort: field<FeatureSort[]>({ initial: [{ key: 'intensity', descending: true }], key: 'sort', isStep: true, read: sortsOf, write: value => value.map(({ key, descending }) => `${descending ? '-' : ''}${key}`).join('.') }),
   /** Columns of the feature table, from the left. */
   columns: field<ColumnLayout>({ initial: DEFAULT_LAYOUT, key: 'columns', isStep: false, read: readLayout, write: writeLayout }),
-  plot: field<Plot>({ initial: 'fold', key: 'plot', isStep: true, read: text => PLOTS.find(name => name === text), write: value => value }),
+  plot: oneOf<Plot>(PLOTS, { initial: 'fold', key: 'plot', isStep: true }),
   /** The features inside an area drawn on the fold-change plot; null: all. */
   area: field<PlotArea | null>({ initial: null, key: 'area', isStep: true, isFilter: true, read: readArea, write: writeArea }),
   /** The part of the plot of ratios that is shown; null: all of it. */
@@ -81,12 +83,12 @@ export const viewFields = {
   closeUp: field<boolean>({ initial: false, key: 'close', isStep: false, read: text => text === 'yes' ? true : undefined, write: value => value ? 'yes' : '' }),
   /** Principal components: the two that are drawn, the scaling, the features and the samples that take part beside the sides. */
   componentPair: field<ComponentPair>({ initial: { across: 1, upwards: 2 }, key: 'pc', isStep: true, read: readPair, write: writePair }),
-  componentScaling: field<ComponentScaling>({ initial: 'none', key: 'scale', isStep: true, read: readScaling, write: value => value }),
+  componentScaling: oneOf<ComponentScaling>(COMPONENT_SCALINGS, { initial: 'none', key: 'scale', isStep: true }),
   componentFeatures: field<FeaturesPresent>({ initial: 'oneSide', key: 'in', isStep: true, read: readPresent, write: writePresent }),
   componentGroups: field<FurtherGroup[]>({ initial: ['pooledQc'], key: 'with', isStep: true, read: readGroups, write: writeGroups }),
-  traceKind: field<TraceKind>({ initial: 'base', key: 'trace', isStep: true, read: text => TRACE_KINDS.find(name => name === text), write: value => value }),
-  traceScale: field<TraceScale>({ initial: 'normalised', key: 'tscale', isStep: true, read: text => TRACE_SCALES.find(name => name === text), write: value => value }),
-  traceOrigin: field<TraceOrigin>({ initial: 'measured', key: 'tfrom', isStep: true, read: text => TRACE_ORIGINS.find(name => name === text), write: value => value }),
+  traceKind: oneOf<TraceKind>(TRACE_KINDS, { initial: 'base', key: 'trace', isStep: true }),
+  traceScale: oneOf<TraceScale>(TRACE_SCALES, { initial: 'normalised', key: 'tscale', isStep: true }),
+  traceOrigin: oneOf<TraceOrigin>(TRACE_ORIGINS, { initial: 'measured', key: 'tfrom', isStep: true }),
   /** The part of the run that the chromatogram shows; null: all of it. */
   traceWindow: field<TimeWindow | null>({ initial: null, key: 'tmin', isStep: false, read: readTimeWindow, write: writeTimeWindow }),
 }

@@ -1,5 +1,4 @@
 import type { FeaturesPresent } from '#shared/science/components/chooseFeatures'
-import { COMPONENT_SCALINGS, type ComponentScaling } from '#shared/science/components/scaleFeatures'
 
 /** Components that can be shown. */
 export const MOST_COMPONENTS = 5
@@ -25,8 +24,6 @@ export function changePair(pair: ComponentPair, end: keyof ComponentPair, compon
   const other = end === 'across' ? 'upwards' : 'across'
   return { ...pair, [end]: component, [other]: pair[other] === component ? pair[end] : pair[other] }
 }
-
-export const readScaling = (text: string): ComponentScaling | undefined => COMPONENT_SCALINGS.find(scaling => scaling === text)
 
 /** Features present in one side at least are "any", those present in both are "both". */
 export const writePresent = (present: FeaturesPresent) => present === 'bothSides' ? 'both' : 'any'

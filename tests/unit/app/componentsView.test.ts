@@ -1,5 +1,6 @@
 import { describe, expect, it } from 'vitest'
-import { changePair, readGroups, readPair, readPresent, readScaling, writeGroups } from '../../../app/utils/componentsView'
+import { viewFields } from '../../../app/utils/benchView'
+import { changePair, readGroups, readPair, readPresent, writeGroups } from '../../../app/utils/componentsView'
 import { formatScore } from '../../../app/utils/formatStatistics'
 
 describe('the choices of principal components in the address', () => {
@@ -12,7 +13,7 @@ describe('the choices of principal components in the address', () => {
     expect(readGroups(writeGroups([]))).toEqual([])
     expect(readGroups('blank.pooledQc.bottle')).toEqual(['pooledQc', 'blank'])
     expect(readGroups('bottle')).toBeUndefined()
-    expect(readScaling('cubic')).toBeUndefined()
+    expect(viewFields.componentScaling.read('cubic')).toBeUndefined()
     expect(readPresent('both')).toBe('bothSides')
     expect(readPresent('neither')).toBeUndefined()
   })
