@@ -3,6 +3,7 @@ import DrawingSvg from '~/components/chart/DrawingSvg.vue'
 import DriftChart from '~/components/chart/DriftChart.vue'
 import EchartsCanvas from '~/components/chart/EchartsCanvas.client.vue'
 import GroupSizesChart from '~/components/chart/GroupSizesChart.vue'
+import MarkRings from '~/components/chart/MarkRings.vue'
 import MassErrorChart from '~/components/chart/MassErrorChart.vue'
 import PlotHint from '~/components/chart/PlotHint.vue'
 import { holds, type ComponentRows } from './componentCase'
@@ -40,6 +41,14 @@ export const chartRows: ComponentRows = {
     holds(GroupSizesChart, 'tells how many features stand in how many tables', { props: { groupSizes: [12, 0, 1400] } }, async ({ press, text }) => {
       await press('Show as table')
       expect(text()).toContain('31 400')
+    }),
+  ],
+  'chart/MarkRings': [
+    holds(MarkRings, 'rings what is looked at and hovered over, each otherwise', { props: { selected: { x: 1, y: 2 }, picked: [{ x: 3, y: 4 }, { x: 5, y: 6 }], hovered: null } }, async ({ change, until }) => {
+      const rings = () => [...document.querySelectorAll('circle')].map(ring => ['cx', 'cy', 'r'].map(name => Number(ring.getAttribute(name))))
+      expect(rings()).toEqual([[3, 4, 7], [5, 6, 7], [1, 2, 9]])
+      await change({ selected: null, picked: [], hovered: { x: 8, y: 9 } })
+      await until(() => expect(rings()).toEqual([[8, 9, 6]]))
     }),
   ],
   'chart/PlotHint': [
