@@ -14,6 +14,7 @@ export default {
     colors: {
       transparent: 'transparent',
       current: 'currentColor',
+      inherit: 'inherit',
       ...Object.fromEntries(names.map(name => [kebab(name), `rgb(var(--${kebab(name)}) / <alpha-value>)`])),
     },
     fontFamily: { text: fonts.text, numbers: fonts.numbers },

@@ -141,6 +141,9 @@ describe('the bench explored', () => {
     await page.getByText('2 rows copied').first().waitFor()
     expect((await page.evaluate<string>('navigator.clipboard.readText()')).trim().split(/\r?\n/)).toHaveLength(3)
 
+    // What is frozen covers what scrolls beneath it.
+    expect(await page.evaluate('getComputedStyle(document.querySelector("[role=gridcell]")).backgroundColor')).not.toBe('rgba(0, 0, 0, 0)')
+
     // What is looked at, as extracted traces and in a link for a colleague.
     await page.getByLabel('Trace', { exact: true }).selectOption('extracted')
     await askedFor(page, 'trace').toBe('extracted')
