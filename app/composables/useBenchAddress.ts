@@ -1,7 +1,9 @@
-import { useDebounceFn } from '@vueuse/core'
+import { useTimeoutFn } from '@vueuse/core'
 import { queryToView, stepsOf, viewFields, viewToQuery, type Query } from '~/utils/benchView'
 
 const KEYS = Object.values(viewFields).map(({ key }) => key)
+/** A burst of changes makes one address. */
+const PAUSE_MS = 120
 
 /**
  * Keeps the store of the bench and the query of the address the same, both ways. Filters and sorting make a step that
@@ -23,17 +25,17 @@ export function useBenchAddress() {
     bench.show(queryToView(route.query))
     before = stepsOf(bench.$state)
   })
-  // What was done last on a bench must not land in the address of the page after it.
-  let left = false
-  onScopeDispose(() => left = true)
-  const write = useDebounceFn(() => {
-    if (left) return
+  const { start, stop } = useTimeoutFn(() => {
     const query = viewToQuery(bench.$state)
     ours = textOf(query)
     if (ours === textOf(route.query)) return
     const isStep = stepsOf(bench.$state) !== before
     before = stepsOf(bench.$state)
     void router[isStep ? 'push' : 'replace']({ query: { ...route.query, ...query }, hash: route.hash })
-  }, 120)
-  watch(() => bench.$state, write, { deep: true })
+  }, PAUSE_MS, { immediate: false })
+  watch(() => bench.$state, start, { deep: true })
+  // Whoever goes back or away at once is not held by what was done just before.
+  onScopeDispose(router.beforeEach((to) => {
+    if (to.path !== route.path || textOf(to.query) !== ours) stop()
+  }))
 }
