@@ -1,5 +1,6 @@
 import type { ComparedSample, ComparisonSettings } from '#shared/science/verdict/settings'
 import { displayFactors, groupOf, type SampleGroup } from '~/charts/sampleValues'
+import { FURTHER_GROUPS, type FurtherGroup } from '~/utils/componentsView'
 
 /** A sample that takes part: its place in the comparison's data, its group, and the factor to normalised counts. */
 export interface ComponentSample {
@@ -21,6 +22,11 @@ export function componentSamples(samples: readonly ComparedSample[], settings: P
     return { index, name: sample.name, group: groupOf(sample, isCompared), factor: isCompared ? own : 1 }
   })
   return ORDER.flatMap(group => all.filter(sample => sample.group === group))
+}
+
+/** Samples that may take part: of the sides, and of the further groups that are chosen. */
+export function samplesOfGroups(samples: readonly ComponentSample[], further: readonly FurtherGroup[]): ComponentSample[] {
+  return samples.filter(({ group }) => !FURTHER_GROUPS.some(each => each === group && !further.includes(each)))
 }
 
 /** Those samples by group, only groups that there are. */

@@ -17,7 +17,7 @@ const WEIGHT_WORDS: Readonly<Record<ComponentScaling, string>> = {
 export const PRESENT_WORDS: Readonly<Record<FeaturesPresent, string>> = { oneSide: 'present in at least one side', bothSides: 'present in both sides' }
 
 /** What the components rest on: features, values filled in, what is left out and what stands as injected. */
-export function componentsBasis(found: SampleComponents, chosen: ChosenFeatures, samples: readonly ComponentSample[], present: FeaturesPresent, scaling: ComponentScaling): string {
+export function componentsBasis(found: SampleComponents, chosen: ChosenFeatures, samples: readonly ComponentSample[], present: FeaturesPresent, scaling: ComponentScaling, samplesLeftOut = 0): string {
   const values = found.features.length * samples.length
   const filled = found.filledValues === 0
     ? 'No value was missing.'
@@ -28,8 +28,9 @@ export function componentsBasis(found: SampleComponents, chosen: ChosenFeatures,
     found.notFound > 0 ? `${wholeNumber(found.notFound)} found in none of these samples` : '',
     found.withoutSpread > 0 ? `${wholeNumber(found.withoutSpread)} that are the same in all of them` : '',
   ].filter(Boolean)
+  const byHand = samplesLeftOut > 0 ? ` ${counted(samplesLeftOut, 'sample')} left out by hand.` : ''
   const asInjected = samples.some(({ group }) => group !== 'A' && group !== 'B') ? ' Samples of no side stand as injected.' : ''
-  return `log2 of ${counted(found.features.length, 'feature')} ${PRESENT_WORDS[present]}, in ${counted(samples.length, 'sample')}. ${WEIGHT_WORDS[scaling]} ${filled}${leftOut.length > 0 ? ` Left out: ${leftOut.join(', ')}.` : ''}${asInjected}`
+  return `log2 of ${counted(found.features.length, 'feature')} ${PRESENT_WORDS[present]}, in ${counted(samples.length, 'sample')}.${byHand} ${WEIGHT_WORDS[scaling]} ${filled}${leftOut.length > 0 ? ` Left out: ${leftOut.join(', ')}.` : ''}${asInjected}`
 }
 
 /** The shares of the first components and of the rest: "PC1 43.2 %, PC2 21.0 %, 3 more 35.8 %". */

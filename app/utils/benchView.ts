@@ -47,15 +47,19 @@ const field = <Value>(each: ViewField<Value>) => each
 /** A field that holds one of a few words, which stand in the address as they are. */
 const oneOf = <Value extends string>(words: readonly Value[], each: Omit<ViewField<Value>, 'read' | 'write'>): ViewField<Value> => ({ ...each, read: text => words.find(word => word === text), write: word => word })
 
+/** A field that holds places, ascending; numbered from 1 in the address, as on the page. */
+const places = (each: Omit<ViewField<number[]>, 'read' | 'write'>, most: number): ViewField<number[]> => ({
+  ...each,
+  read: text => [...new Set(text.split('.').flatMap(number => featureNumber(number) ?? []))].sort((a, b) => a - b).slice(0, most),
+  write: value => value.map(place => place + 1).join('.'),
+})
+
 /** All that the address holds of the bench, so that a copied link opens it again. A new part is one more field here. */
 export const viewFields = {
   /** Place of the selected feature in the alignment; numbered from 1 in the address, as on the page. */
   selected: field<number | null>({ initial: null, key: 'feature', isStep: false, read: featureNumber, write: value => value === null ? '' : String(value + 1) }),
   /** Features looked at beside the selected one, in ascending order. */
-  picked: field<number[]>({ initial: [], key: 'also', isStep: false, write: value => value.map(each => each + 1).join('.'), read: (text) => {
-    const read = text.split('.').flatMap(each => featureNumber(each) ?? [])
-    return [...new Set(read)].sort((a, b) => a - b).slice(0, MOST_PICKED)
-  } }),
+  picked: places({ initial: [], key: 'also', isStep: false }, MOST_PICKED),
   verdicts: field<Verdict[]>({ initial: [], key: 'verdict', isStep: true, isFilter: true, write: value => COUNTED_VERDICTS.filter(name => value.includes(name)).join('.'), read: (text) => {
     const named = text.split('.')
     return COUNTED_VERDICTS.filter(name => named.includes(name))
@@ -86,6 +90,8 @@ export const viewFields = {
   componentScaling: oneOf<ComponentScaling>(COMPONENT_SCALINGS, { initial: 'none', key: 'scale', isStep: true }),
   componentFeatures: field<FeaturesPresent>({ initial: 'oneSide', key: 'in', isStep: true, read: readPresent, write: writePresent }),
   componentGroups: field<FurtherGroup[]>({ initial: ['pooledQc'], key: 'with', isStep: true, read: readGroups, write: writeGroups }),
+  /** Samples left out of them one by one, by their place in the comparison. */
+  componentWithout: places({ initial: [], key: 'without', isStep: true }, 1000),
   traceKind: oneOf<TraceKind>(TRACE_KINDS, { initial: 'base', key: 'trace', isStep: true }),
   traceScale: oneOf<TraceScale>(TRACE_SCALES, { initial: 'normalised', key: 'tscale', isStep: true }),
   traceOrigin: oneOf<TraceOrigin>(TRACE_ORIGINS, { initial: 'measured', key: 'tfrom', isStep: true }),

@@ -92,6 +92,9 @@ export const benchRows: ComponentRows = {
     holds(ComponentChoices, 'chooses who takes part and what is drawn', { props: { samples: all, names: sideNames, explained: found } }, async ({ fill, has }) => {
       await fill(/^blanks \(2\)$/, true)
       expect(useBenchStore().componentGroups).toContain('blank')
+      const first = all[0]
+      await fill(new RegExp(`^${first?.name}$`), false)
+      expect(useBenchStore().componentWithout).toEqual([first?.index])
       expect(has(/^Millrace/)).toBe(false)
       await fill('Across', (document.querySelectorAll('select')[0]?.options[1]?.text ?? '').trim())
       expect(useBenchStore().componentPair).toEqual({ across: 2, upwards: 1 })

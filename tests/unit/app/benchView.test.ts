@@ -43,6 +43,7 @@ const view: fc.Arbitrary<BenchView> = fc.record({
   componentScaling: fc.constantFrom(...COMPONENT_SCALINGS),
   componentFeatures: fc.constantFrom('oneSide', 'bothSides'),
   componentGroups: fc.subarray([...FURTHER_GROUPS]),
+  componentWithout: fc.uniqueArray(fc.nat(500), { maxLength: 20 }).map(all => all.sort((a, b) => a - b)),
   traceKind: fc.constantFrom(...TRACE_KINDS),
   traceScale: fc.constantFrom(...TRACE_SCALES),
   traceOrigin: fc.constantFrom(...TRACE_ORIGINS),

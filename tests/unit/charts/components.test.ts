@@ -177,6 +177,8 @@ describe('the plot of loadings', () => {
 describe('what the components rest on', () => {
   it('is told with numbers', () => {
     const text = componentsBasis(found, chosen, all, 'oneSide', 'pareto')
+    expect(componentsBasis(found, chosen, all, 'oneSide', 'pareto', 2)).toContain('2 samples left out by hand.')
+    expect(text).not.toContain('by hand')
     expect(text).toContain(`log2 of ${found.features.length} features present in at least one side, in 14 samples.`)
     expect(text).toMatch(/[\d\u202F]+ of [\d\u202F]+ values \(\d+ %\), in \d+ features, were not detected and are filled with half the feature’s minimum\./)
     expect(text).toContain(`Left out: ${chosen.setAside} set aside, ${chosen.notPresent} not present in at least one side`)
