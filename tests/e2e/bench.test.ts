@@ -1,43 +1,17 @@
-import { rmSync } from 'node:fs'
-import type { Browser, Page } from 'playwright-core'
+import type { Page } from 'playwright-core'
 import { afterAll, beforeAll, describe, expect, it } from 'vitest'
 import { axeFindings } from '../support/axe'
-import { addBenchStudy, type BenchStudy } from '../support/benchStudy'
-import { launchBrowser } from '../support/browser'
-import { startBuiltServer, type BuiltServer } from '../support/builtServer'
-import { BLANKS_IN_VIEW, openBench, signInPage } from '../support/openBench'
-import { watchedPage, type WatchedPageOptions } from '../support/watchedPage'
+import { openBenchPages, type BenchPages } from '../support/benchPages'
+import { BLANKS_IN_VIEW, queryOf } from '../support/openBench'
 
 const FEATURES = 50_000
-let study: BenchStudy
-let server: BuiltServer
-let browser: Browser
+let pages: BenchPages
 beforeAll(async () => {
-  study = await addBenchStudy(FEATURES)
-  server = await startBuiltServer({ folder: study.folder, env: { NUXT_SESSION_COOKIE_SECURE: 'false' } })
-  browser = await launchBrowser()
+  pages = await openBenchPages(FEATURES)
 })
-afterAll(async () => {
-  await browser?.close()
-  await server?.stop()
-  if (study) rmSync(study.folder, { recursive: true, force: true })
-})
-
-/** Acts on the opened bench; the page must have nothing to report. */
-async function onBench(query: string, act: (page: Page) => Promise<void>, { signInName = 'analyst', ...options }: WatchedPageOptions & { signInName?: string } = {}) {
-  const watched = await watchedPage(browser, options)
-  try {
-    await signInPage(watched.page, server.url, signInName)
-    await openBench(watched.page, server.url, study, query)
-    await act(watched.page)
-    expect(watched.problems()).toEqual([])
-  }
-  finally {
-    await watched.close()
-  }
-}
+afterAll(() => pages?.close())
+const onBench: BenchPages['onBench'] = (...asked) => pages.onBench(...asked)
 const selected = (page: Page) => page.locator('[role=row][aria-selected=true]')
-const queryOf = (page: Page) => Object.fromEntries(new URL(page.url()).searchParams)
 const showsFeatures = (page: Page, count: string | RegExp) => page.getByText(count).first().waitFor()
 
 describe('the bench with 50,000 features', () => {
@@ -90,7 +64,7 @@ describe('the bench with 50,000 features', () => {
   }))
 
   it('finds one m/z within its tolerance among all', () => onBench('?sort=mz', async (page) => {
-    const mz = await page.locator('[role=row][aria-rowindex="20"] [role=gridcell]').nth(2).innerText()
+    const mz = await page.locator('[role=row][aria-rowindex="10"] [role=gridcell]').nth(2).innerText()
     await page.getByLabel('Find a feature').fill(mz)
     await showsFeatures(page, /^[1-9] of /)
     expect(await page.locator('[role=row] [role=gridcell]:nth-child(3)').allInnerTexts()).toContain(mz)

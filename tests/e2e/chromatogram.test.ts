@@ -1,49 +1,27 @@
-import { rmSync } from 'node:fs'
-import type { Browser, Locator, Page } from 'playwright-core'
+import type { Locator, Page } from 'playwright-core'
 import { afterAll, beforeAll, describe, expect, it } from 'vitest'
 import { axeFindings } from '../support/axe'
-import { addBenchStudy, type BenchStudy } from '../support/benchStudy'
-import { launchBrowser } from '../support/browser'
-import { startBuiltServer, type BuiltServer } from '../support/builtServer'
+import { openBenchPages, type BenchPages } from '../support/benchPages'
 import { manyFeatures } from '../support/manyFeatures'
-import { openBench, signInPage } from '../support/openBench'
-import { watchedPage, type WatchedPageOptions } from '../support/watchedPage'
+import { queryOf } from '../support/openBench'
+import type { WatchedPageOptions } from '../support/watchedPage'
 
 const FEATURES = 2000
-let study: BenchStudy
-let server: BuiltServer
-let browser: Browser
+let pages: BenchPages
 beforeAll(async () => {
-  study = await addBenchStudy(FEATURES)
-  server = await startBuiltServer({ folder: study.folder, env: { NUXT_SESSION_COOKIE_SECURE: 'false' } })
-  browser = await launchBrowser()
+  pages = await openBenchPages(FEATURES)
 })
-afterAll(async () => {
-  await browser?.close()
-  await server?.stop()
-  if (study) rmSync(study.folder, { recursive: true, force: true })
-})
+afterAll(() => pages?.close())
 
 /** Acts on the chromatogram once it is drawn; the page must have nothing to report. */
-async function onChromatogram(query: string, act: (page: Page, plot: Locator) => Promise<void>, options: WatchedPageOptions = {}) {
-  const watched = await watchedPage(browser, options)
-  try {
-    const { page } = watched
-    await signInPage(page, server.url, 'analyst')
-    await openBench(page, server.url, study, query)
-    const figure = page.locator('figure').filter({ hasText: 'Mirrored chromatogram' })
-    await figure.scrollIntoViewIfNeeded()
-    await figure.getByText('drawn from features').first().waitFor()
-    await figure.locator('canvas').waitFor()
-    await figure.locator('.cursor-crosshair').waitFor()
-    await act(page, figure.locator('.cursor-crosshair'))
-    expect(watched.problems()).toEqual([])
-  }
-  finally {
-    await watched.close()
-  }
-}
-const queryOf = (page: Page) => Object.fromEntries(new URL(page.url()).searchParams)
+const onChromatogram = (query: string, act: (page: Page, plot: Locator) => Promise<void>, options: WatchedPageOptions = {}) => pages.onBench(query, async (page) => {
+  const figure = page.locator('figure').filter({ hasText: 'Mirrored chromatogram' })
+  await figure.scrollIntoViewIfNeeded()
+  await figure.getByText('drawn from features').first().waitFor()
+  await figure.locator('canvas').waitFor()
+  await figure.locator('.cursor-crosshair').waitFor()
+  await act(page, figure.locator('.cursor-crosshair'))
+}, options)
 const patient = { timeout: 60_000 }
 /** Room left and right of the plot, CSS pixels, as on wide pages. */
 const [LEFT, RIGHT] = [96, 12]

@@ -1,41 +1,16 @@
-import { readFileSync, rmSync } from 'node:fs'
-import type { Browser, Page } from 'playwright-core'
+import { readFileSync } from 'node:fs'
+import type { Page } from 'playwright-core'
 import { afterAll, beforeAll, describe, expect, it } from 'vitest'
 import { axeFindings } from '../support/axe'
-import { addBenchStudy, type BenchStudy } from '../support/benchStudy'
-import { launchBrowser } from '../support/browser'
-import { startBuiltServer, type BuiltServer } from '../support/builtServer'
-import { openBench, signInPage } from '../support/openBench'
-import { watchedPage, type WatchedPageOptions } from '../support/watchedPage'
+import { openBenchPages, type BenchPages } from '../support/benchPages'
+import { queryOf } from '../support/openBench'
 
-let study: BenchStudy
-let server: BuiltServer
-let browser: Browser
+let pages: BenchPages
 beforeAll(async () => {
-  study = await addBenchStudy(2000)
-  server = await startBuiltServer({ folder: study.folder, env: { NUXT_SESSION_COOKIE_SECURE: 'false' } })
-  browser = await launchBrowser()
+  pages = await openBenchPages(2000)
 })
-afterAll(async () => {
-  await browser?.close()
-  await server?.stop()
-  if (study) rmSync(study.folder, { recursive: true, force: true })
-})
-
-/** Acts on the opened bench; the page must have nothing to report. */
-async function onBench(query: string, act: (page: Page) => Promise<void>, options: WatchedPageOptions = {}) {
-  const watched = await watchedPage(browser, options)
-  try {
-    await signInPage(watched.page, server.url, 'analyst')
-    await openBench(watched.page, server.url, study, query)
-    await act(watched.page)
-    expect(watched.problems()).toEqual([])
-  }
-  finally {
-    await watched.close()
-  }
-}
-const queryOf = (page: Page) => Object.fromEntries(new URL(page.url()).searchParams)
+afterAll(() => pages?.close())
+const onBench: BenchPages['onBench'] = (...asked) => pages.onBench(...asked)
 const grid = (page: Page) => page.locator('[role=grid]')
 const heads = (page: Page) => page.locator('[role=columnheader]').evaluateAll(cells => cells.map(cell => [...cell.querySelectorAll('button:first-child > span:not(.sr-only), :scope > span')].map(part => part.textContent).join('').trim()))
 
@@ -54,11 +29,11 @@ describe('the feature table', () => {
     await page.getByRole('checkbox', { name: 'p of equivalence' }).click()
     await expect.poll(() => heads(page)).toContain('p equiv.')
     await expect.poll(() => queryOf(page).columns).toContain('~')
-    await page.goto(server.url + study.path)
+    await page.goto(pages.address)
     await expect.poll(() => heads(page)).toContain('p equiv.')
   }))
 
-  it('filters by formula, says which ion fits, and calls it no identification', () => onBench('?sort=mz', async (page) => {
+  it('filters by formula, says which ion fits, and calls it no identification', () => onBench('?sort=mz&mzs=430~440', async (page) => {
     await page.getByText('Filters by mass, formula and numbers').click()
     const formula = page.getByRole('group', { name: 'Formula' })
     await formula.getByLabel('within').fill('5000')
@@ -71,7 +46,7 @@ describe('the feature table', () => {
   }))
 
   it('goes by keyboard alone: picks, copies, reaches the heads, sorts by two, freezes from the menu', () => onBench('', async (page) => {
-    await page.context().grantPermissions(['clipboard-read', 'clipboard-write'], { origin: server.url })
+    await page.context().grantPermissions(['clipboard-read', 'clipboard-write'], { origin: pages.url })
     await grid(page).focus()
     for (const key of ['ArrowDown', 'Space', 'ArrowDown', 'ArrowDown', 'Space']) await page.keyboard.press(key)
     await expect.poll(() => page.locator('[role=row][aria-selected=true]').count()).toBe(2)

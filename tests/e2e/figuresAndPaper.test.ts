@@ -1,39 +1,15 @@
-import { readFileSync, rmSync } from 'node:fs'
-import type { Browser, Page } from 'playwright-core'
+import { readFileSync } from 'node:fs'
+import type { Page } from 'playwright-core'
 import { afterAll, beforeAll, describe, expect, it } from 'vitest'
-import { addBenchStudy, type BenchStudy } from '../support/benchStudy'
-import { launchBrowser } from '../support/browser'
-import { startBuiltServer, type BuiltServer } from '../support/builtServer'
-import { openBench, signInPage } from '../support/openBench'
+import { openBenchPages, type BenchPages } from '../support/benchPages'
 import { readSvg } from '../support/readSvg'
-import { watchedPage } from '../support/watchedPage'
 
-let study: BenchStudy
-let server: BuiltServer
-let browser: Browser
+let pages: BenchPages
 beforeAll(async () => {
-  study = await addBenchStudy(300)
-  server = await startBuiltServer({ folder: study.folder, env: { NUXT_SESSION_COOKIE_SECURE: 'false' } })
-  browser = await launchBrowser()
+  pages = await openBenchPages(300)
 })
-afterAll(async () => {
-  await browser?.close()
-  await server?.stop()
-  if (study) rmSync(study.folder, { recursive: true, force: true })
-})
-
-async function onBench(query: string, act: (page: Page) => Promise<void>, { signInName = 'analyst', width = 1440 } = {}) {
-  const watched = await watchedPage(browser, { width })
-  try {
-    await signInPage(watched.page, server.url, signInName)
-    await openBench(watched.page, server.url, study, query)
-    await act(watched.page)
-    expect(watched.problems()).toEqual([])
-  }
-  finally {
-    await watched.close()
-  }
-}
+afterAll(() => pages?.close())
+const onBench: BenchPages['onBench'] = (...asked) => pages.onBench(...asked)
 
 /** Saves a figure; what arrives as a file, and what was sent meanwhile: anything but plain reading from the own server. */
 async function saved(page: Page, figure: RegExp, format: 'SVG' | 'PNG') {
@@ -44,7 +20,7 @@ async function saved(page: Page, figure: RegExp, format: 'SVG' | 'PNG') {
     page.getByRole('group', { name: figure }).getByRole('button', { name: format }).click(),
   ])
   const bytes = readFileSync(await download.path())
-  return { name: download.suggestedFilename(), bytes, sent: asked.filter(each => !/^GET (?:blob|data):/.test(each) && !each.startsWith(`GET ${server.url}/`)) }
+  return { name: download.suggestedFilename(), bytes, sent: asked.filter(each => !/^GET (?:blob|data):/.test(each) && !each.startsWith(`GET ${pages.url}/`)) }
 }
 
 const pngSize = (bytes: Buffer) => [bytes.readUInt32BE(16), bytes.readUInt32BE(20)]

@@ -21,6 +21,9 @@ export async function openBench(page: Page, url: string, { path }: BenchStudy, q
   return { rowsMs, plotMs: performance.now() - start }
 }
 
+/** What the address of a page asks for. */
+export const queryOf = (page: Page): Record<string, string> => Object.fromEntries(new URL(page.url()).searchParams)
+
 /** Looks at what is in view: rows that have no text, and pixels of the frame that no row covers. Runs in the page. */
 export const BLANKS_IN_VIEW = `(() => {
   const grid = document.querySelector('[role=grid]')
