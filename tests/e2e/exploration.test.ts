@@ -4,6 +4,7 @@ import { afterAll, beforeAll, describe, expect, it } from 'vitest'
 import { launchBrowser } from '../support/browser'
 import { startDemoServer, type DemoServer } from '../support/demoServer'
 import { lookAt } from '../support/lookAt'
+import { queryOf } from '../support/openBench'
 import { watchedPage } from '../support/watchedPage'
 
 let server: DemoServer
@@ -18,7 +19,6 @@ afterAll(async () => {
 })
 
 const patient = { timeout: 60_000 }
-const queryOf = (page: Page) => Object.fromEntries(new URL(page.url()).searchParams)
 const askedFor = (page: Page, name: string) => expect.poll(() => queryOf(page)[name] ?? '', patient)
 const bench = () => `/studies/${server.studyId}/comparisons/${server.comparisonId}`
 const table = (page: Page) => page.getByRole('grid', { name: 'Features' })
