@@ -36,6 +36,19 @@ describe('turns', () => {
     expect(await Promise.all(all)).toEqual(['a1', 'a2', 'a3', 'b1', 'c1'])
   })
 
+  it('let several of one asker run where they may', async () => {
+    const { began, work, end } = works()
+    const turns = new Turns(Number.POSITIVE_INFINITY, 10, 2)
+    const all = ['a1', 'a2', 'a3', 'b1'].map(name => turns.take(name.charAt(0), wanted, work(name)))
+    await settled()
+    expect(began).toEqual(['a1', 'a2', 'b1'])
+    end('a2')
+    await settled()
+    expect(began.at(-1)).toBe('a3')
+    for (const name of ['a1', 'a3', 'b1']) end(name)
+    expect(await Promise.all(all)).toEqual(['a1', 'a2', 'a3', 'b1'])
+  })
+
   it('pass by what nobody waits for any more, and go on after work that fails', async () => {
     const { began, work, end } = works()
     const turns = new Turns(1, 10)
