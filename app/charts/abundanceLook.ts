@@ -1,16 +1,7 @@
 import { textWidth, TEXT_SIZE, type DrawnShape, type Ink, type MarkShape } from '~/charts/drawing'
+import { groupLook } from '~/charts/groupLook'
 import type { SampleGroup, SampleValue } from '~/charts/sampleValues'
 import { formatIntensity } from '~/utils/formatMeasures'
-
-/** How the samples of a group are marked: shape and colour say the same. */
-export const groupLook: Readonly<Record<SampleGroup, { shape: MarkShape, ink: Ink }>> = {
-  A: { shape: 'circle', ink: 'sideA' },
-  B: { shape: 'square', ink: 'sideB' },
-  blank: { shape: 'cross', ink: 'aside' },
-  pooledQc: { shape: 'diamond', ink: 'muted' },
-  standard: { shape: 'triangle', ink: 'muted' },
-  notCompared: { shape: 'cross', ink: 'unsettled' },
-}
 
 export const MARK_SIZE = 4
 export const ESTIMATED_DASH = '3 2'

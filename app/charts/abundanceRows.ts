@@ -1,5 +1,6 @@
 import type { SideNames } from '#shared/science/verdict/reasonFacts'
-import { ESTIMATED_DASH, groupLook, legend, MARK_SIZE, sampleSays } from '~/charts/abundanceLook'
+import { ESTIMATED_DASH, legend, MARK_SIZE, sampleSays } from '~/charts/abundanceLook'
+import { groupLook } from '~/charts/groupLook'
 import { fitText, round, textWidth, type Drawing, type DrawnShape } from '~/charts/drawing'
 import { logScale, type LogScale } from '~/charts/logScale'
 import { groupLabels, isFound, type SampleGroup, type SampleValue } from '~/charts/sampleValues'

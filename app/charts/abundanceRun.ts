@@ -1,4 +1,5 @@
-import { ESTIMATED_DASH, groupLook, legend, MARK_SIZE, sampleSays } from '~/charts/abundanceLook'
+import { ESTIMATED_DASH, legend, MARK_SIZE, sampleSays } from '~/charts/abundanceLook'
+import { groupLook } from '~/charts/groupLook'
 import { signalAxis, type AbundanceInput } from '~/charts/abundanceRows'
 import { fitText, round, type Drawing, type DrawnShape } from '~/charts/drawing'
 import { logScale, type LogScale } from '~/charts/logScale'

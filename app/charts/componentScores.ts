@@ -3,7 +3,7 @@ import { ellipsePoints, groupEllipse, type GroupEllipse } from '#shared/science/
 import type { SampleComponents } from '#shared/science/components/sampleComponents'
 import type { SideNames } from '#shared/science/verdict/reasonFacts'
 import type { Palette } from '#shared/tokens'
-import { groupLook } from '~/charts/abundanceLook'
+import { groupLook } from '~/charts/groupLook'
 import { chartText } from '~/charts/axis'
 import { along, componentAxis, componentGrid, componentHint, componentTitle, zeroLines } from '~/charts/componentAxis'
 import { samplesByGroup, type ComponentSample } from '~/charts/componentSamples'

@@ -1,5 +1,5 @@
 import type { SideNames } from '#shared/science/verdict/reasonFacts'
-import { groupLook } from '~/charts/abundanceLook'
+import { groupLook } from '~/charts/groupLook'
 import { fitText, round, type Drawing, type DrawnShape } from '~/charts/drawing'
 import { logScale } from '~/charts/logScale'
 import { groupLabels, isFound, type SampleGroup, type SampleValue } from '~/charts/sampleValues'
