@@ -20,11 +20,12 @@ export interface LabelRoom {
   highest: number
 }
 
-/** CSS pixels: height of a label, width of a character, its distance from what it stands clear of, and how far it may be lifted. */
+/** CSS pixels: height of a label, width of a character, its distance from what it stands clear of, how far it may be lifted, and in what steps. */
 const LINE = 16
 const CHARACTER = 7
 const GAP = 8
 const HIGHEST_LIFT = 64
+const STEP = 2
 /** No more labels, however much room there is. */
 const MOST = 14
 
@@ -36,7 +37,7 @@ const overlap = (one: Box, other: Box) => one.left < other.right && other.left <
 
 /**
  * The marks that get a label, so few that none overlaps another, the lines, or what stands in the corners: what is looked at
- * first, then flagged ones from the highest down. Marks outside the window get none; the selected one always gets one.
+ * first, one above the other where they stand close, then flagged ones from the highest down. Marks outside the window get none; the selected one always gets one.
  * @param topBetween the highest drawn on a side between two times
  * @returns as many as fit, in the order in which they were given room
  */
@@ -52,13 +53,23 @@ export function chooseLabels(marks: readonly PeakMark[], room: LabelRoom, topBet
     const beside = mark.text.length * CHARACTER / 2 * perPixel
     const clear = topBetween(mark.side, mark.minutes - beside, mark.minutes + beside) - mark.height
     const needed = Math.max(0, clear / room.highest * room.height / 2)
-    const labelled = { ...mark, lift: Math.min(needed, HIGHEST_LIFT) }
-    const box = boxOf(labelled, room)
-    if (mark.why !== 'selected' && (needed > HIGHEST_LIFT || taken.some(each => overlap(each, box)))) continue
-    taken.push(box)
+    const lift = mark.why === 'selected' ? Math.min(needed, HIGHEST_LIFT) : freeLift(mark, needed, room, taken)
+    if (lift === null) continue
+    const labelled = { ...mark, lift }
+    taken.push(boxOf(labelled, room))
     chosen.push(labelled)
   }
   return chosen
+}
+
+/** How far a label must be lifted to stand free: what is looked at goes up step by step, what is flagged only clear of the lines drawn. Null: too far. */
+function freeLift(mark: PeakMark, needed: number, room: LabelRoom, taken: readonly Box[]): number | null {
+  const most = mark.why === 'picked' ? HIGHEST_LIFT : Math.min(needed, HIGHEST_LIFT)
+  for (let lift = needed; lift <= most; lift += STEP) {
+    const box = boxOf({ ...mark, lift }, room)
+    if ((lift === needed || (box.top >= 0 && box.bottom <= room.height)) && !taken.some(each => overlap(each, box))) return lift
+  }
+  return null
 }
 
 /** Where the label of a mark stands: above its top on side A, below it on side B. */

@@ -10,6 +10,9 @@ const BESIDE_OTHERS = 0.02
 export interface MarkedFeatures {
   mz: Float64Array
   retentionMinutes: Float64Array
+  /** Median level of each side, NaN where it is not found. */
+  levelA: Float64Array
+  levelB: Float64Array
   selected: number | null
   picked: readonly number[]
   flagged: readonly number[]
@@ -17,9 +20,9 @@ export interface MarkedFeatures {
 
 /**
  * A mark for each feature looked at, and for each flagged one where the whole run is drawn: at the top of the side's mean near
- * its time, on the side where that is higher. Where the features' own traces are extracted, each on its own and no other.
+ * its time, on the side that holds more of the feature: the higher line there may be another compound's. Where the features' own traces are extracted, each on its own and no other.
  */
-export function peakMarks(curves: readonly Curve[], { mz, retentionMinutes, selected, picked, flagged }: MarkedFeatures, textOf: (mz: number) => string): PeakMark[] {
+export function peakMarks(curves: readonly Curve[], { mz, retentionMinutes, levelA, levelB, selected, picked, flagged }: MarkedFeatures, textOf: (mz: number) => string): PeakMark[] {
   const extracted = new Set(curves.flatMap(({ feature }) => feature ?? []))
   const why = new Map<number, PeakMark['why']>()
   if (extracted.size === 0) for (const feature of flagged) why.set(feature, 'flagged')
@@ -29,8 +32,8 @@ export function peakMarks(curves: readonly Curve[], { mz, retentionMinutes, sele
     const minutes = retentionMinutes[feature]
     if (minutes === undefined || (extracted.size > 0 && !extracted.has(feature))) return []
     const topOf = (side: 'A' | 'B') => Math.max(0, ...curves.filter(curve => curve.side === side && curve.sampleName === null && (curve.feature === null || curve.feature === feature)).map(curve => topBeside(curve, minutes)))
-    const [a, b] = [topOf('A'), topOf('B')]
-    return [{ feature, side: a >= b ? 'A' : 'B', minutes, height: Math.max(a, b), why: reason, text: textOf(mz[feature] ?? Number.NaN) }]
+    const side = (levelA[feature] || 0) >= (levelB[feature] || 0) ? 'A' : 'B'
+    return [{ feature, side, minutes, height: topOf(side), why: reason, text: textOf(mz[feature] ?? Number.NaN) }]
   })
 }
 

@@ -57,7 +57,7 @@ export function chromatogramOption(input: ChromatogramInput): EChartsOption {
     // The drawing must not make room of its own for labels: the brush over it goes by the same frame.
     grid: { ...frame, outerBoundsMode: 'none', show: true, borderColor: palette.hairline },
     xAxis: { ...plainAxis(palette, 'retention time, minutes', 26), type: 'value', min: window[0], max: window[1], splitLine: { show: false }, axisLine: { onZero: false, lineStyle: { color: palette.muted } }, axisLabel: { ...chartText(palette), showMinLabel: false, showMaxLabel: false, formatter: (value: number) => Number(value.toFixed(3)).toString() } },
-    yAxis: { ...plainAxis(palette, narrow ? '' : valueName(scale, byAmount), 56), type: 'value', min: -highest, max: highest, interval: step, splitLine: { lineStyle: { color: palette.hairline, opacity: 0.6 } }, axisLabel: { ...chartText(palette), formatter: (value: number) => scale === 'own' ? `${Math.abs(Math.round(value))} %` : formatIntensity(Math.abs(value)) } },
+    yAxis: { ...plainAxis(palette, narrow ? '' : valueName(scale, byAmount), 56), type: 'value', min: -highest, max: highest, interval: step, splitLine: { lineStyle: { color: palette.hairline, opacity: 0.6 } }, axisLabel: { ...chartText(palette), formatter: (value: number) => valueLabel(Math.abs(value), scale) } },
     series: [
       ...drawn.map(({ curve, data }, i) => lineSeries(curve, data, i, input)),
       middleLine(input),
@@ -70,6 +70,9 @@ export function chromatogramOption(input: ChromatogramInput): EChartsOption {
 
 /** What the values are. */
 export const valueName = (scale: TraceScale, byAmount: boolean) => scale === 'own' ? '% of each highest' : byAmount ? 'intensity, normalised' : 'intensity, counts'
+
+/** No line goes beyond its own 100 %: what stands above is room for labels. */
+const valueLabel = (value: number, scale: TraceScale) => scale !== 'own' ? formatIntensity(value) : value > 100.5 ? '' : `${Math.round(value)} %`
 
 /** The points to draw, as pairs with side B turned down, and the highest within the window. */
 function pointsOf({ side, minutes, values }: Curve, [fromMinutes, toMinutes]: TimeWindow, columns: number): { data: Float64Array, highest: number } {

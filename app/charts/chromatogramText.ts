@@ -7,6 +7,8 @@ import type { TimeWindow, TraceKind, TraceOrigin, TraceScale } from '~/utils/tra
 
 const KIND_NAMES: Record<TraceKind, string> = { total: 'total (TIC)', base: 'base peak (BPC)', extracted: 'extracted traces (XIC)' }
 
+const DRAWN_FEATURES: Record<TraceKind, string> = { total: 'the sum of the features as peaks', base: 'the highest of the features as peaks', extracted: 'each feature as a peak' }
+
 /** "Mirrored chromatogram: base peak (BPC), drawn from features". */
 export function chromatogramTitle(kind: TraceKind, origin: TraceOrigin): string {
   return `Mirrored chromatogram: ${KIND_NAMES[kind]}${origin === 'features' ? ', drawn from features' : ''}`
@@ -45,6 +47,8 @@ export interface ChromatogramTextInput {
   window: TimeWindow
   kind: TraceKind
   origin: TraceOrigin
+  /** There is raw data, whether it is drawn or not. */
+  hasTraces: boolean
   scale: TraceScale
   byAmount: boolean
   names: SideNames
@@ -55,7 +59,7 @@ export interface ChromatogramTextInput {
 }
 
 /** The mirrored chromatogram in words, for who does not see it. */
-export function chromatogramText({ curves, window, kind, origin, scale, byAmount, names, withoutTrace, featureName }: ChromatogramTextInput): string {
+export function chromatogramText({ curves, window, kind, origin, hasTraces, scale, byAmount, names, withoutTrace, featureName }: ChromatogramTextInput): string {
   const samplesOf = (side: 'A' | 'B') => new Set(curves.flatMap(curve => curve.side === side ? curve.sampleName ?? [] : [])).size
   const means = highestPoints(curves, window).filter(({ sampleName }) => sampleName === null)
   const tops = means.map(({ side, feature, minutes, value }) => {
@@ -63,7 +67,7 @@ export function chromatogramText({ curves, window, kind, origin, scale, byAmount
     return Number.isNaN(minutes) ? `nothing of ${who}` : `${who} at ${formatMinutes(minutes)} min (${formatTraceValue(value, scale)})`
   })
   return [
-    origin === 'features' ? `No raw data: ${kind === 'total' ? 'the sum' : kind === 'base' ? 'the highest' : 'each one'} of the features as peaks 0.1 min wide at half height, as high as their intensity.` : '',
+    origin === 'features' ? `${hasTraces ? 'Not the raw data' : 'No raw data'}: ${DRAWN_FEATURES[kind]} 0.1 min wide at half height, as high as their intensity.` : '',
     `Up ${names.a} (${counted(samplesOf('A'), 'sample')}), down ${names.b} (${counted(samplesOf('B'), 'sample')}): each sample a thin line, the mean of the side a strong one.`,
     scale === 'normalised' ? (byAmount ? 'Normalised as the comparison.' : 'In counts, as the comparison.') : 'Each line to its own highest point, so that even noise can look like a peak.',
     withoutTrace.length > 0 ? `Without a trace: ${withoutTrace.join(', ')}.` : '',

@@ -2,7 +2,7 @@ import type { CsvCell } from '#shared/formats/delimitedText/writeCsv'
 import { flagKindNames } from '#shared/schemas/flag'
 import { plainAdduct, usualIons, type Masses } from '#shared/science/mass/ionFits'
 import type { SideNames } from '#shared/science/verdict/reasonFacts'
-import { METHOD, REASON_LABELS, REASONS } from '#shared/science/verdict/reasons'
+import { METHOD, reasonLabel } from '#shared/science/verdict/reasons'
 import { verdictPhrase } from '#shared/science/verdict/verdictPhrase'
 import type { VerdictResult } from '#shared/science/verdict/verdictResult'
 import type { FlagLine } from '#shared/types/flag'
@@ -64,20 +64,20 @@ export function featureColumns({ result, foldLimit, names, masses, flags }: Colu
     number('high', 'high', 'log2 ratio, high end of 95 %', 4.5, c.high, formatLog2),
     number('atLeast', 'at least', 'ratio at least (times)', 5, c.atLeast, formatTimes),
     number('p', 'p', 'p', 5.5, c.p, formatProbability),
-    number('q', 'q', 'q', 5.5, c.q, formatProbability, { cell: i => c.method[i] === METHOD.assumed ? 'assumed' : formatProbability(c.q[i]!) }),
+    number('q', 'q', 'q', 5, c.q, formatProbability, { cell: i => c.method[i] === METHOD.assumed ? 'assumed' : formatProbability(c.q[i]!) }),
     number('equivalenceP', 'p equiv.', 'p of equivalence', 5.5, c.equivalenceP, formatProbability),
     text('method', 'judged by', 'judged by', 9, method),
     number('reach', 'reach', 'reach (times)', 5, c.reach, formatTimes),
-    number('levelA', 'level A', `median normalised intensity, ${names.a}`, 7.5, c.levelA, formatIntensity),
-    number('levelB', 'level B', `median normalised intensity, ${names.b}`, 7.5, c.levelB, formatIntensity),
+    number('levelA', 'level A', `median normalised intensity, ${names.a}`, 6.75, c.levelA, formatIntensity),
+    number('levelB', 'level B', `median normalised intensity, ${names.b}`, 6.75, c.levelB, formatIntensity),
     number('foundA', 'in A', `preparations found of ${preparationsA}, ${names.a}`, 3.5, c.detectedA, count => `${count}/${preparationsA}`),
     number('foundB', 'in B', `preparations found of ${preparationsB}, ${names.b}`, 3.5, c.detectedB, count => `${count}/${preparationsB}`),
     number('traceRatio', 'trace', 'signal in the other side\'s traces over the level of the present side (times)', 5, c.traceRatio, formatTimes),
     number('blankA', 'A/blank', `over blank, ${names.a} (times)`, 5, c.blankRatioA, formatTimes),
     number('blankB', 'B/blank', `over blank, ${names.b} (times)`, 5, c.blankRatioB, formatTimes),
-    number('intensity', 'highest', 'highest intensity, counts', 7.5, c.highestCounts, formatIntensity),
+    number('intensity', 'highest', 'highest intensity, counts', 6.75, c.highestCounts, formatIntensity),
     number('mass', 'M', `neutral mass ${asIon} (u)`, 6, neutral, formatMz),
-    text('reason', 'Reason', 'reason', 14, i => REASON_LABELS[REASONS[c.reason[i] ?? 0] ?? 'inNeither'], { grows: true }),
+    text('reason', 'Reason', 'reason', 11.5, i => reasonLabel(c.reason[i]!, c.notAboveBlank[i]!), { grows: true }),
   ]
 }
 
@@ -101,10 +101,10 @@ function fitColumn({ what, of }: AskedIons, mz: Float64Array): FeatureColumn {
 
 const flagWords = (lines: readonly FlagLine[] = []) => [...new Set(lines.map(flag => flagKindNames[flag.kind]))].join(', ')
 
-/** What a cell says on hover where it shows less: the number in full, and the ratio as times. */
+/** What a cell says on hover where it shows less: the number in full, the ratio as times, and words that may be cut off. */
 export function fullValue(column: FeatureColumn, feature: number, names: SideNames): string | undefined {
   const value = column.exact(feature)
-  if (typeof value !== 'number') return column.isNumber || value === '' || value === column.cell(feature) ? undefined : String(value)
+  if (typeof value !== 'number') return column.isNumber || value === '' ? undefined : String(value)
   if (!Number.isFinite(value)) return undefined
   return column.id === 'ratio' ? `${formatFold(value, names)}; ${value}` : String(value)
 }

@@ -16,14 +16,14 @@ export function featureFacts({ columns, preparationsA, preparationsB }: VerdictR
   if (Number.isFinite(log2Ratio)) {
     const known = Number.isFinite(number(columns.low))
     facts.push({
-      term: 'Ratio', value: `${formatFold(log2Ratio, names)}, log2 ${formatLog2(log2Ratio)}`,
+      term: 'Ratio', value: `${formatFold(log2Ratio, names)}, log2 B/A ${formatLog2(log2Ratio)}`,
       remark: known ? `95 % interval ${formatLog2(number(columns.low))} to ${formatLog2(number(columns.high))} (log2, ${names.b} over ${names.a})` : 'without interval',
     })
   }
   if (Number.isFinite(number(columns.atLeast))) facts.push({ term: 'At least', value: formatTimes(number(columns.atLeast)), remark: 'lowest of the one over everything of the other' })
   if (columns.method[i] === METHOD.welch) facts.push({ term: 'Certainty', value: `q ${formatProbability(number(columns.q))}`, remark: `p ${formatProbability(number(columns.p))}, Welch t on log2${Number.isFinite(number(columns.equivalenceP)) ? `; equivalence p ${formatProbability(number(columns.equivalenceP))}` : ''}` })
   if (columns.method[i] === METHOD.assumed) facts.push({ term: 'Certainty', value: 'assumed precision', remark: `no p-value; every value is taken to scatter by ${threeDigits(settings.assumedCvPercent)} %` })
-  if (Number.isFinite(number(columns.reach))) facts.push({ term: 'Reach', value: formatTimes(number(columns.reach)), remark: `above the other side's highest floor; ${formatTimes(settings.reachLimit)} is asked` })
+  if (Number.isFinite(number(columns.reach))) facts.push({ term: 'Reach', value: formatTimes(number(columns.reach)), remark: `above ${columns.notAboveBlank[i] ? 'what the blank shows, beside which the other side does not stand out' : 'the other side\'s highest floor'}; ${formatTimes(settings.reachLimit)} is asked` })
   const trace = traceFact(columns, i, settings)
   if (trace) facts.push(trace)
   facts.push({ term: names.a, value: `in ${columns.detectedA[i]} of ${preparationsA}`, remark: levelOf(number(columns.levelA)) })

@@ -1,5 +1,5 @@
 import type { VerdictColumns } from '#shared/science/verdict/verdictResult'
-import { REASON_LABELS, REASONS } from '#shared/science/verdict/reasons'
+import { reasonLabel, REASONS } from '#shared/science/verdict/reasons'
 import { parseNumber } from '~/utils/parseNumber'
 
 /** What a person typed into the search field, read as numbers or words. Absent parts do not restrict. */
@@ -41,13 +41,13 @@ export function parseSearch(text: string, massPpm: number): FeatureSearch | null
 const minutesOf = (text: string) => ({ value: read(text), tolerance: Math.max(LEAST_MINUTES, typedPrecision(text)) })
 
 /** A search as a question to one feature. `said` gives more words of a feature, such as its verdict in words. */
-export function searchRule(search: FeatureSearch, columns: Pick<VerdictColumns, 'mz' | 'retentionMinutes' | 'reason'>, said: (feature: number) => string): (feature: number) => boolean {
+export function searchRule(search: FeatureSearch, columns: Pick<VerdictColumns, 'mz' | 'retentionMinutes' | 'reason' | 'notAboveBlank'>, said: (feature: number) => string): (feature: number) => boolean {
   const { mz, minutes, number, words } = search
-  const reasonHas = words === undefined ? [] : REASONS.map(reason => REASON_LABELS[reason].includes(words))
+  const reasonHas = [0, 1].map(notAboveBlank => words === undefined ? [] : REASONS.map((_, code) => reasonLabel(code, notAboveBlank).includes(words)))
   return (i) => {
     if (number !== undefined && i !== number - 1) return false
     if (mz && !(Math.abs(columns.mz[i]! - mz.value) <= mz.tolerance)) return false
     if (minutes && !(Math.abs(columns.retentionMinutes[i]! - minutes.value) <= minutes.tolerance)) return false
-    return words === undefined || reasonHas[columns.reason[i]!] === true || said(i).toLowerCase().includes(words)
+    return words === undefined || reasonHas[columns.notAboveBlank[i]! > 0 ? 1 : 0]?.[columns.reason[i]!] === true || said(i).toLowerCase().includes(words)
   }
 }

@@ -2,7 +2,7 @@ import { csvLine, csvLines, type CsvCell } from '../../../shared/formats/delimit
 import { unpackVerdicts } from '../../../shared/formats/verdictColumns'
 import type { SideNames } from '../../../shared/science/verdict/reasonFacts'
 import { reasonSentence } from '../../../shared/science/verdict/reasonSentence'
-import { METHODS, REASON_LABELS, REASONS } from '../../../shared/science/verdict/reasons'
+import { METHODS, reasonLabel } from '../../../shared/science/verdict/reasons'
 import type { ComparisonSettings } from '../../../shared/science/verdict/settings'
 import { verdictPhrase } from '../../../shared/science/verdict/verdictPhrase'
 import type { VerdictResult } from '../../../shared/science/verdict/verdictResult'
@@ -43,10 +43,9 @@ const METHOD_WORDS = { none: '', welch: 'Welch t', assumed: 'assumed precision' 
 
 function row(i: number, result: VerdictResult, settings: ComparisonSettings, names: SideNames): CsvCell[] {
   const c = result.columns
-  const reason = REASONS[c.reason[i]!]!
   return [
     i + 1, Number(c.mz[i]!.toFixed(6)), Number(c.retentionMinutes[i]!.toFixed(5)),
-    verdictPhrase(c.verdict[i]!, settings.foldLimit, names, { reason: c.reason[i]!, atLeast: c.atLeast[i]! }), REASON_LABELS[reason], reasonSentence(i, result, settings, names),
+    verdictPhrase(c.verdict[i]!, settings.foldLimit, names, { reason: c.reason[i]!, atLeast: c.atLeast[i]! }), reasonLabel(c.reason[i]!, c.notAboveBlank[i]!), reasonSentence(i, result, settings, names),
     2 ** c.log2Ratio[i]!, c.log2Ratio[i]!, c.low[i]!, c.high[i]!, METHOD_WORDS[METHODS[c.method[i]!]!], c.p[i]!, c.q[i]!, c.equivalenceP[i]!, c.reach[i]!, c.atLeast[i]!, c.traceRatio[i]!, c.traceSamples[i] || null,
     c.detectedA[i]!, result.preparationsA, c.detectedB[i]!, result.preparationsB, c.levelA[i]!, c.levelB[i]!, c.blankRatioA[i]!, c.blankRatioB[i]!,
   ]

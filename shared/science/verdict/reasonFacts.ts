@@ -92,11 +92,11 @@ export class ReasonFacts {
     const [more, less] = log2Ratio < 0 ? [this.names.a, this.names.b] : [this.names.b, this.names.a]
     const size = 2 ** Math.abs(log2Ratio)
     const words = threeDigits(size) === '1' ? `${this.names.a} and ${this.names.b} are equal` : `${more} holds ${times(size)} of ${less}`
-    return `${words} (log2 ratio ${signed(log2Ratio, 2)})`
+    return `${words} (log2 B/A ${signed(log2Ratio, 2)})`
   }
 
   get interval() {
-    return `95 % interval of the log2 ratio ${signed(this.columns.low[this.i]!, 2)} to ${signed(this.columns.high[this.i]!, 2)}`
+    return `95 % interval of log2 B/A ${signed(this.columns.low[this.i]!, 2)} to ${signed(this.columns.high[this.i]!, 2)}`
   }
 
   private get standardError() {

@@ -42,6 +42,12 @@ export const REASON_LABELS: Record<Reason, string> = {
   signalInTrace: 'a signal stands in the other side\'s trace',
 }
 
+/** The words for one feature: what counts as not found though its table lists it says so, or the row would seem to contradict itself. */
+export function reasonLabel(reason: number, notAboveBlank: number): string {
+  const name = REASONS[reason] ?? 'inNeither'
+  return name === 'foundOnly' && notAboveBlank > 0 ? 'the other side is not above blank' : REASON_LABELS[name]
+}
+
 /** How a ratio was judged. Codes are stored: append, never reorder. */
 export const METHODS = ['none', 'welch', 'assumed'] as const
 export const METHOD = { none: 0, welch: 1, assumed: 2 } as const

@@ -66,6 +66,13 @@ describe('the mirrored chromatogram', () => {
     expect(shadedIn([1, 20])).toEqual([])
   })
 
+  it('names no share beyond 100 % where each line goes to its own highest', () => {
+    const { yAxis } = chromatogramOption({ ...input, scale: 'own', curves: scaledCurves(lines, 'own') })
+    const { max, axisLabel: { formatter } } = yAxis as { max: number, axisLabel: { formatter: (value: number) => string } }
+    expect(max).toBeGreaterThan(100)
+    expect([-max, -100, 0, 60, 100, max].map(formatter)).toEqual(['', '100 %', '0 %', '60 %', '100 %', ''])
+  })
+
   it('labels what is looked at and flagged by m/z, on its side', () => {
     const mark = { feature: 1, side: 'B' as const, minutes: 12, height: 400, why: 'selected' as const, text: '353.0878' }
     const [label] = (seriesOf({ marks: [mark] }).find(({ id }) => id === 'marks')?.data ?? []) as { value: number[], label: { formatter: string, position: string } }[]
@@ -80,13 +87,14 @@ describe('the mirrored chromatogram', () => {
 })
 
 describe('the mirrored chromatogram in words', () => {
-  const text = { curves: input.curves, window: [0, 20] as const, kind: 'base' as const, origin: 'features' as const, scale: 'normalised' as const, byAmount: true, names, withoutTrace: [], featureName: (feature: number) => `m/z ${feature}` }
+  const text = { curves: input.curves, window: [0, 20] as const, kind: 'base' as const, origin: 'features' as const, hasTraces: false, scale: 'normalised' as const, byAmount: true, names, withoutTrace: [], featureName: (feature: number) => `m/z ${feature}` }
 
   it('says in title and text that it is drawn from features', () => {
     expect(chromatogramTitle('base', 'features')).toBe('Mirrored chromatogram: base peak (BPC), drawn from features')
     expect(chromatogramTitle('total', 'measured')).toBe('Mirrored chromatogram: total (TIC)')
     expect(chromatogramText(text)).toContain('No raw data: the highest of the features as peaks 0.1 min wide')
     expect(chromatogramText({ ...text, origin: 'measured' })).not.toContain('features')
+    expect(chromatogramText({ ...text, hasTraces: true, kind: 'extracted' })).toContain('Not the raw data: each feature as a peak 0.1 min wide')
   })
 
   it('tells sides, scale and the highest point of each mean', () => {

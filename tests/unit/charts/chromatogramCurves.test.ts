@@ -64,14 +64,14 @@ describe('scaled curves', () => {
 })
 
 describe('marks of peaks', () => {
-  const features = { mz: Float64Array.of(100, 200, 300), retentionMinutes: Float64Array.of(1, 3, 3), selected: 1, picked: [2], flagged: [0, 1] }
+  const features = { mz: Float64Array.of(100, 200, 300), retentionMinutes: Float64Array.of(1, 3, 3), levelA: Float64Array.of(5, 2, 7), levelB: Float64Array.of(1, 9, Number.NaN), selected: 1, picked: [2], flagged: [0, 1] }
   const curves = scaledCurves([line('A', 'M1', [0, 5, 0, 2, 0]), line('B', 'T1', [0, 1, 0, 9, 0])], 'normalised')
 
-  it('stand at the top of the higher side; looked at goes before flagged', () => {
+  it('stand on the side that holds more of the feature, though the other line is higher there; looked at goes before flagged', () => {
     expect(peakMarks(curves, features, String)).toEqual([
       { feature: 0, side: 'A', minutes: 1, height: 5, why: 'flagged', text: '100' },
       { feature: 1, side: 'B', minutes: 3, height: 9, why: 'selected', text: '200' },
-      { feature: 2, side: 'B', minutes: 3, height: 9, why: 'picked', text: '300' },
+      { feature: 2, side: 'A', minutes: 3, height: 2, why: 'picked', text: '300' },
     ])
   })
 

@@ -12,8 +12,18 @@ describe('labels of peaks', () => {
   })
 
   it('leave out what would overlap, what is looked at coming first, then the highest', () => {
-    expect(chosen([mark(0, 8), mark(1, 8.2, { why: 'picked', height: 510 }), mark(2, 8.4, { why: 'selected', height: 490 })])).toEqual([2])
+    expect(chosen([mark(0, 8), mark(1, 8.2, { height: 510 }), mark(2, 8.4, { why: 'selected', height: 490 })])).toEqual([2])
     expect(chosen([mark(0, 8), mark(1, 8.2, { height: 510 })])).toEqual([1])
+  })
+
+  it('stand one above the other where several that are looked at stand close', () => {
+    const close = [mark(0, 8, { why: 'selected', height: 400 }), ...[1, 2, 3].map(i => mark(i, 8 + i / 10, { why: 'picked', height: 400 - i }))]
+    const lifts = chooseLabels(close, room, flat).map(({ lift }) => lift)
+    expect(lifts).toHaveLength(4)
+    expect(new Set(lifts).size).toBe(4)
+    expect(Math.max(...lifts)).toBeLessThanOrEqual(64)
+    // Never beyond the plot.
+    expect(chosen([mark(0, 8, { why: 'selected', height: 900 }), mark(1, 8.1, { why: 'picked', height: 900 })])).toEqual([0])
   })
 
   it('stand on both sides at the same time, and one above the other', () => {

@@ -128,6 +128,14 @@ describe('the fold-change plot in words', () => {
     for (const part of ['Millrace', 'Tallow Lane', '×2', '×3', String(many.result.counts.onlyA)]) expect(text).toContain(part)
   })
 
+  it('says how many pass the filter, as the counts are of all', () => {
+    const all = Object.values(many.result.counts).reduce((sum, count) => sum + count, 0) - many.result.counts.inNeither
+    const told = (drawn: number) => foldText(many.result, points, many.settings, names, drawn)
+    expect(told(12)).toContain('Only the 12 of ')
+    expect(told(0)).toContain('No feature passes the filter: none is drawn. The counts are of all.')
+    expect(told(all)).toBe(foldText(many.result, points, many.settings, names))
+  })
+
   it('says so where precision is assumed', () => {
     const single = judge([onA('M1', [1000]), onB('T1', [4000])])
     expect(foldText(single.result, placeFeatures(single.result.columns), many.settings, names)).toContain('assumed precision of 20 %')

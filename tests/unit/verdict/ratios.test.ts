@@ -55,7 +55,7 @@ describe('with replicates', () => {
     expect(result.columns.log2Ratio[0]).toBeGreaterThan(1.9)
     expect(result.columns.log2Ratio[1]).toBe(-(result.columns.log2Ratio[0] ?? 0))
     expect(result.testedFeatures).toBe(2)
-    expect(sentences[0]).toMatch(/^Tallow Lane holds ×4\.0\d? of Millrace \(log2 ratio \+2\.01\); 95 % interval of the log2 ratio \+1\.\d\d to \+2\.\d\d\. q = .*, at most 0\.05 is asked\.$/)
+    expect(sentences[0]).toMatch(/^Tallow Lane holds ×4\.0\d? of Millrace \(log2 B\/A \+2\.01\); 95 % interval of log2 B\/A \+1\.\d\d to \+2\.\d\d\. q = .*, at most 0\.05 is asked\.$/)
   })
 
   it('calls level what is equivalent, and says when a smaller difference is certain', () => {
