@@ -20,11 +20,12 @@ export interface LabelRoom {
   highest: number
 }
 
-/** CSS pixels: height of a label, width of a character, its distance from what it stands clear of, how far it may be lifted, and in what steps. */
+/** CSS pixels: height of a label, width of a character, its distance from what it stands clear of, how far it may be lifted (if picked, among others), and in what steps. */
 const LINE = 16
 const CHARACTER = 7
 const GAP = 8
 const HIGHEST_LIFT = 64
+const HIGHEST_PICKED_LIFT = 120
 const STEP = 2
 /** No more labels, however much room there is. */
 const MOST = 14
@@ -64,7 +65,7 @@ export function chooseLabels(marks: readonly PeakMark[], room: LabelRoom, topBet
 
 /** How far a label must be lifted to stand free: what is looked at goes up step by step, what is flagged only clear of the lines drawn. Null: too far. */
 function freeLift(mark: PeakMark, needed: number, room: LabelRoom, taken: readonly Box[]): number | null {
-  const most = mark.why === 'picked' ? HIGHEST_LIFT : Math.min(needed, HIGHEST_LIFT)
+  const most = mark.why === 'picked' ? HIGHEST_PICKED_LIFT : Math.min(needed, HIGHEST_LIFT)
   for (let lift = needed; lift <= most; lift += STEP) {
     const box = boxOf({ ...mark, lift }, room)
     if ((lift === needed || (box.top >= 0 && box.bottom <= room.height)) && !taken.some(each => overlap(each, box))) return lift

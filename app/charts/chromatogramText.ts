@@ -67,7 +67,7 @@ export function chromatogramText({ curves, window, kind, origin, hasTraces, scal
     return Number.isNaN(minutes) ? `nothing of ${who}` : `${who} at ${formatMinutes(minutes)} min (${formatTraceValue(value, scale)})`
   })
   return [
-    origin === 'features' ? `${hasTraces ? 'Not the raw data' : 'No raw data'}: ${DRAWN_FEATURES[kind]} 0.1 min wide at half height, as high as their intensity.` : '',
+    origin === 'features' ? `${hasTraces ? 'Not the raw data' : 'No raw data'}: ${DRAWN_FEATURES[kind]} 0.1 min wide at half height, as high as ${kind === 'extracted' ? 'its' : 'their'} intensity.` : '',
     `Up ${names.a} (${counted(samplesOf('A'), 'sample')}), down ${names.b} (${counted(samplesOf('B'), 'sample')}): each sample a thin line, the mean of the side a strong one.`,
     scale === 'normalised' ? (byAmount ? 'Normalised as the comparison.' : 'In counts, as the comparison.') : 'Each line to its own highest point, so that even noise can look like a peak.',
     withoutTrace.length > 0 ? `Without a trace: ${withoutTrace.join(', ')}.` : '',

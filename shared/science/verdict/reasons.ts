@@ -45,7 +45,7 @@ export const REASON_LABELS: Record<Reason, string> = {
 /** The words for one feature: what counts as not found though its table lists it says so, or the row would seem to contradict itself. */
 export function reasonLabel(reason: number, notAboveBlank: number): string {
   const name = REASONS[reason] ?? 'inNeither'
-  return name === 'foundOnly' && notAboveBlank > 0 ? 'the other side is not above blank' : REASON_LABELS[name]
+  return name === 'foundOnly' && notAboveBlank > 0 ? 'other side not above blank' : REASON_LABELS[name]
 }
 
 /** How a ratio was judged. Codes are stored: append, never reorder. */

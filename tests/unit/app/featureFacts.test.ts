@@ -18,7 +18,7 @@ describe('facts of a feature', () => {
       return [featureFacts(result, 0, comparisonDefaults, names).find(({ term }) => term === 'Reach')?.remark, reasonLabel(reason[0] ?? 0, notAboveBlank[0] ?? 0)]
     }
     expect(told([none])).toEqual(['above the other side\'s highest floor; ×3 is asked', 'found on one side'])
-    expect(told([1500])).toEqual(['above what the blank shows, beside which the other side does not stand out; ×3 is asked', 'the other side is not above blank'])
+    expect(told([1500])).toEqual(['above what the blank shows, beside which the other side does not stand out; ×3 is asked', 'other side not above blank'])
   })
 
   it('label a log2 ratio as B over A, whichever side is more', () => {
