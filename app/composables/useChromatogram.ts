@@ -34,7 +34,11 @@ export function useChromatogram(source: () => BenchSource, data: () => Compariso
   const hasTraces = computed(() => samples.value.some(({ position }) => traces.value?.some(trace => trace.position === position)))
   const origin = computed((): TraceOrigin => hasTraces.value ? bench.traceOrigin : 'features')
   const withoutTrace = computed(() => origin.value === 'features' ? [] : samples.value.filter(({ position }) => !traces.value?.some(trace => trace.position === position)).map(({ sampleName }) => sampleName))
-  const extracted = computed(() => bench.looked.slice(0, MOST_EXTRACTED))
+  /** An address may name features that this alignment does not have. */
+  const extracted = computed(() => {
+    const aligned = Object.values(source().version.counts).reduce((sum, count) => sum + count, 0)
+    return bench.looked.filter(feature => feature < aligned).slice(0, MOST_EXTRACTED)
+  })
 
   async function loadTraces(from: BenchSource): Promise<readonly SampleTrace[]> {
     const loaded = await from.loadTraces?.() ?? []

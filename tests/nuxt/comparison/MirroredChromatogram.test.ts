@@ -91,7 +91,8 @@ describe('the mirrored chromatogram', () => {
     await shows(chart, 'Select a feature to see its trace.')
     useBenchStore().select(5)
     await expect.poll(() => asked, patient).toEqual([[5]])
-    useBenchStore().pick(8)
+    // As an address of another alignment may have it: what is not here is not asked for.
+    useBenchStore().picked = [8, 900_000]
     await expect.poll(() => asked, patient).toEqual([[5], [8]])
     await expect.poll(() => chart.findComponent(ChromatogramKey).exists() && chart.findComponent(ChromatogramKey).text(), patient).toContain('m/z')
     await drawn(chart, 4)
