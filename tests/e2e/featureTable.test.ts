@@ -41,6 +41,7 @@ describe('the feature table', () => {
     await formula.getByLabel('of the molecule').press('Enter')
     await page.getByRole('button', { name: /C21H24O10 within 5000 ppm: not an identification/ }).waitFor()
     await page.getByRole('gridcell', { name: /\[M−H\]⁻ [+−]?[\d.]+ ppm/ }).first().waitFor()
+    await expect.poll(() => queryOf(page).formula).toBe('C21H24O10~5000')
     await page.goto(page.url())
     await page.getByRole('button', { name: /C21H24O10 within 5000 ppm/ }).waitFor()
   }))
