@@ -85,7 +85,7 @@ describe('the pages of alignments', () => {
     await page.waitForURL(onResult)
     await page.getByRole('heading', { name: 'Alignment 2' }).waitFor()
     // For a moment the form that was left is there too, and says the same in its list.
-    await page.getByRole('paragraph').filter({ hasText: 'Time tolerance 0.03 min (before: time tolerance 0.1 min).' }).waitFor()
+    await page.getByRole('list', { name: 'What differs from the run before' }).getByText('Time tolerance 0.03 min (before: time tolerance 0.1 min).').waitFor()
     expect(watched.problems()).toEqual([])
   })
 

@@ -125,7 +125,7 @@ describe('from sign-in to what only one side holds', () => {
     await page.getByLabel('Find a feature').fill('153.0193')
     await rows.filter({ hasText: /153\.0[12]/ }).first().click()
     await page.getByRole('heading', { name: /153\.0[12]/ }).waitFor()
-    await page.getByText('found only in Millrace').first().waitFor()
+    await page.getByRole('complementary', { name: 'Feature card' }).getByText('found only in Millrace').first().waitFor()
     await look('14 only in A')
     expect(watched.problems()).toEqual([])
   })
