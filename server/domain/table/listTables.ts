@@ -1,10 +1,11 @@
-import { and, asc, count, desc, eq, ne, sql } from 'drizzle-orm'
+import { and, asc, count, eq, sql } from 'drizzle-orm'
 import { alias } from 'drizzle-orm/sqlite-core'
 import { GAP_FILLED_SHARE } from '../../../shared/schemas/table'
 import type { StudyTables, TableLine, UploadDetail } from '../../../shared/types/table'
 import type { Database } from '../../db/open'
-import { alignmentTables, jobs, originals, people, samples, tables, uploads } from '../../db/schema'
+import { alignmentTables, originals, people, samples, tables, uploads } from '../../db/schema'
 import { notFound } from '../DomainError'
+import { filesOnTheirWay } from '../upload/filesOnTheirWay'
 import { uploadLine } from './uploadLine'
 
 /** A study's tables, the files that are being read, wait or were refused, and the samples to choose from. */
@@ -27,9 +28,7 @@ export function listTables(db: Database, studyId: string): StudyTables {
     ...row, timeUnit: layout.timeUnit, gapFilled: emptyShare !== null && emptyShare < GAP_FILLED_SHARE, alignments: used.get(row.id) ?? 0,
     createdAt: row.createdAt.toISOString(), replacedAt: row.replacedAt?.toISOString() ?? null,
   }))
-  const open = db.select({ upload: uploads, job: { progress: jobs.progress, message: jobs.message } }).from(uploads).leftJoin(jobs, eq(jobs.id, uploads.jobId))
-    .where(and(eq(uploads.studyId, studyId), eq(uploads.kind, 'table'), ne(uploads.status, 'read'))).orderBy(desc(uploads.createdAt), desc(sql`${uploads}.rowid`)).all()
-  return { tables: lines, uploads: open.map(row => uploadLine(row.upload, row.job)), samples: db.select({ id: samples.id, name: samples.name }).from(samples).where(eq(samples.studyId, studyId)).orderBy(asc(samples.position)).all() }
+  return { tables: lines, ...filesOnTheirWay(db, studyId, 'table') }
 }
 
 /** One upload with what its proposal is made from. */

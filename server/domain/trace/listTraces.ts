@@ -1,8 +1,8 @@
-import { and, asc, desc, eq, ne } from 'drizzle-orm'
+import { asc, eq } from 'drizzle-orm'
 import type { StudyTraces } from '../../../shared/types/trace'
 import type { Database } from '../../db/open'
-import { jobs, people, samples, traces, uploads } from '../../db/schema'
-import { uploadLine } from '../table/uploadLine'
+import { people, samples, traces, uploads } from '../../db/schema'
+import { filesOnTheirWay } from '../upload/filesOnTheirWay'
 import { versionsByTrace } from './retireTrace'
 
 /** A study's traces (never their columns), the mzML files that are being read or were refused, and the samples to choose from. */
@@ -16,11 +16,8 @@ export function listTraces(db: Database, studyId: string): StudyTraces {
     .leftJoin(samples, eq(samples.id, traces.sampleId))
     .where(eq(traces.studyId, studyId)).orderBy(asc(samples.position), asc(traces.createdAt), asc(traces.fileName)).all()
   const used = versionsByTrace(db, studyId)
-  const open = db.select({ upload: uploads, job: { progress: jobs.progress, message: jobs.message } }).from(uploads).leftJoin(jobs, eq(jobs.id, uploads.jobId))
-    .where(and(eq(uploads.studyId, studyId), eq(uploads.kind, 'trace'), ne(uploads.status, 'read'))).orderBy(desc(uploads.createdAt)).all()
   return {
     traces: rows.map(row => ({ ...row, versions: used.get(row.id) ?? 0, createdAt: row.createdAt.toISOString(), replacedAt: row.replacedAt?.toISOString() ?? null })),
-    uploads: open.map(row => uploadLine(row.upload, row.job)),
-    samples: db.select({ id: samples.id, name: samples.name }).from(samples).where(eq(samples.studyId, studyId)).orderBy(asc(samples.position)).all(),
+    ...filesOnTheirWay(db, studyId, 'trace'),
   }
 }
