@@ -30,8 +30,6 @@ export interface BenchSource {
 export interface BenchCapabilities {
   /** Save a new version. */
   save: boolean
-  /** Address of the verdicts as CSV; null: no export. */
+  /** Address of the verdicts as CSV; null: nothing goes out, no rows and no figures either. */
   csvAddress: string | null
-  /** Save its plots as figures. */
-  saveFigures: boolean
 }

@@ -71,7 +71,7 @@ export const benchRows: ComponentRows = {
     }),
   ],
   'comparison/ComparisonBench': [
-    holds(ComparisonBench, 'loads what it shows, selects, and clears a filter that nothing passes', { props: { source: inventedSource, capabilities: { save: true, csvAddress: null, saveFigures: true } } }, async ({ find, press, text, fill, until }) => {
+    holds(ComparisonBench, 'loads what it shows, selects, and clears a filter that nothing passes', { props: { source: inventedSource, capabilities: { save: true, csvAddress: '/verdicts.csv' } } }, async ({ find, press, text, fill, until }) => {
       await until(() => expect(find('[role=grid]').attributes('aria-rowcount')).toMatch(/^\d{2,}$/))
       await find('[role=grid]').trigger('keydown', { key: 'ArrowDown' })
       await until(() => expect(text()).toMatch(/feature #\d+/))
@@ -82,7 +82,7 @@ export const benchRows: ComponentRows = {
       await press('Keys of the bench (?)')
       expect(find('[role=dialog]').text()).toContain('next feature')
     }),
-    holds(ComparisonBench, 'says why there is nothing to show', { props: { source: { ...inventedSource, loadVerdicts: () => Promise.reject(new Error('gone')) }, capabilities: { save: false, csvAddress: '/verdicts.csv', saveFigures: true } } }, async ({ find, text, control, until }) => {
+    holds(ComparisonBench, 'says why there is nothing to show', { props: { source: { ...inventedSource, loadVerdicts: () => Promise.reject(new Error('gone')) }, capabilities: { save: false, csvAddress: '/verdicts.csv' } } }, async ({ find, text, control, until }) => {
       await until(() => expect(find('[role=alert]').text()).toContain('Something went wrong on this page.'))
       expect(text()).toContain('Nothing to show.')
       expect(control('Verdicts as CSV').attributes('href')).toBe('/verdicts.csv')

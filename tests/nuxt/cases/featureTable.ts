@@ -9,7 +9,7 @@ import { inventedSource, inventedVersion, judged, sideNames } from './inventedCo
 const { result, settings } = judged
 const columns = featureColumns({ result, foldLimit: 1, names: sideNames, masses: inventedVersion, flags: new Map(), asked: [] })
 const rows = Int32Array.of(4, 9, 17)
-const section = { source: inventedSource, capabilities: { save: false, csvAddress: '/verdicts.csv', saveFigures: true }, result, isPreview: false, rows, total: 60, selectedRow: -1, settings, names: sideNames, flags: new Map(), cautions: [] }
+const section = { source: inventedSource, capabilities: { save: false, csvAddress: '/verdicts.csv' }, result, isPreview: false, rows, total: 60, selectedRow: -1, settings, names: sideNames, flags: new Map(), cautions: [] }
 
 export const featureTableRows: ComponentRows = {
   'comparison/ColumnChoice': { test: 'tests/nuxt/comparison/featureTable.test.ts' },
@@ -59,7 +59,7 @@ export const featureTableRows: ComponentRows = {
       await press('Pick several rows')
       expect(control('Pick several rows').attributes('aria-pressed')).toBe('true')
     }),
-    holds(FeatureSection, 'says that no feature passes, and exports nothing for those who may not', { props: { ...section, rows: new Int32Array(0), capabilities: { save: false, csvAddress: null, saveFigures: false } } }, ({ text, has }) => {
+    holds(FeatureSection, 'says that no feature passes, and exports nothing for those who may not', { props: { ...section, rows: new Int32Array(0), capabilities: { save: false, csvAddress: null } } }, ({ text, has }) => {
       expect(text()).toContain('No feature passes this filter.')
       expect(has('Rows shown as CSV')).toBe(false)
     }),

@@ -19,7 +19,7 @@ const source: BenchSource = {
   loadExtracted: null,
 }
 const mountSection = (csvAddress: string | null = '/verdicts.csv') => mountSuspended(FeatureSection, {
-  props: { source, capabilities: { save: false, csvAddress, saveFigures: false }, result: many.result, isPreview: false, rows, total: 300, selectedRow: -1, settings: many.settings, names, flags: new Map(), cautions: ['Few replicates.'] },
+  props: { source, capabilities: { save: false, csvAddress }, result: many.result, isPreview: false, rows, total: 300, selectedRow: -1, settings: many.settings, names, flags: new Map(), cautions: ['Few replicates.'] },
 })
 const copy = async (section: Awaited<ReturnType<typeof mountSection>>) => {
   let text = ''
